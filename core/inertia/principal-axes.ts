@@ -1,4 +1,5 @@
 import { eigenSymmetric3 } from '../linalg/eigen-symmetric3.ts';
+import { atan2 } from '../math/index.ts';
 import type { Vector3 } from '../linalg/vector3.ts';
 import { type Body, inertiaAboutCentre } from './body.ts';
 
@@ -17,8 +18,8 @@ export interface PrincipalAxes {
   readonly nearest: readonly [AxisName, AxisName, AxisName];
   /** Indices of principal axes that are free to turn because their moments are equal; empty, two or all three. */
   readonly free: readonly number[];
-  /** Angle between body axis x, y, z and the principal axis that it names [rad], 0 … π/2, by atan2-free chord. */
-  readonly tiltCosines: Vector3;
+  /** Angle between body axis x, y, z and the principal axis that it names [rad], 0 … π/2. */
+  readonly tilt: Vector3;
 }
 
 /**
@@ -33,12 +34,18 @@ export function principalAxes(body: Body): PrincipalAxes {
   const free = freeAxes(values);
   const axes = free.length > 0 ? alignFree(vectors, free) : vectors;
   const assignment = assignAxes(axes, IDENTITY_AXES);
-  const tiltCosines: [number, number, number] = [1, 1, 1];
+  const tilt: [number, number, number] = [0, 0, 0];
   assignment.forEach((bodyAxis, i) => {
-    tiltCosines[bodyAxis] = Math.min(1, Math.abs(axes[i]![bodyAxis]!));
+    tilt[bodyAxis] = angleToBodyAxis(axes[i]!, bodyAxis);
   });
   const names = assignment.map((k) => AXIS_NAMES[k]!) as [AxisName, AxisName, AxisName];
-  return { moments: values, axes, nearest: names, free, tiltCosines };
+  return { moments: values, axes, nearest: names, free, tilt };
+}
+
+/** By the sine and the cosine, so that a tilt of a microradian keeps its digits. */
+function angleToBodyAxis(axis: Vector3, k: number): number {
+  const [p, q] = [axis[(k + 1) % 3]!, axis[(k + 2) % 3]!];
+  return atan2(Math.sqrt(p * p + q * q), Math.abs(axis[k]!));
 }
 
 const IDENTITY_AXES: readonly [Vector3, Vector3, Vector3] = [

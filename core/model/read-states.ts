@@ -1,0 +1,89 @@
+import type { StateDocument } from '../document/index.ts';
+import type { FileReader } from './file-reader.ts';
+import type { ParameterModel, PartModel, Quantity, StateModel } from './model.ts';
+import { findPart } from './part-paths.ts';
+import { boundQuantity, type Parameters } from './read-parameters.ts';
+import { unknownName } from './read-part.ts';
+import { type Where, within } from './where.ts';
+
+/** The state of a file that declares none. */
+export const NOMINAL = 'nominal';
+
+export function readStates(
+  states: Readonly<Record<string, StateDocument>> | undefined,
+  parameters: Parameters,
+  reader: FileReader,
+): StateModel[] {
+  if (states === undefined) return [{ name: NOMINAL, parameters: new Map(), omit: [], where: null }];
+  return Object.entries(states).map(([name, state]) => {
+    const where = within(within(null, 'states'), name);
+    const values = new Map<number, Quantity>();
+    for (const [parameter, text] of Object.entries(state.parameters ?? {})) {
+      const at = within(within(where, 'parameters'), parameter);
+      const symbol = parameters.slots.get(parameter);
+      if (!symbol) unknownName(reader, at, 'parameter', parameter, parameters.slots.keys());
+      else values.set(symbol.slot, boundQuantity(reader, text, parameters.list[symbol.slot]!.value, at));
+    }
+    checkCircle(parameters.list, values, reader, where);
+    return { name, parameters: values, omit: state.omit ?? [], where };
+  });
+}
+
+/** `omit:` names parts by path; checked once the parts are read. */
+export function checkOmitted(states: readonly StateModel[], parts: readonly PartModel[], reader: FileReader): void {
+  for (const state of states)
+    state.omit.forEach((path, i) => {
+      const found = findPart(parts, path);
+      if (!('unknown' in found)) return;
+      reader.fault(within(within(state.where, 'omit'), i), {
+        code: 'MODEL_UNKNOWN_PART',
+        message: `expected the path of a part, found '${path}', in which '${found.unknown}' is not one`,
+        hint: found.nearest ? `did you mean '${found.nearest}'?` : 'paths join names with /, such as boom/access hole',
+      });
+    });
+}
+
+/** A state's values may use other parameters, so a circle can close in one state alone. */
+function checkCircle(
+  list: readonly ParameterModel[],
+  values: ReadonlyMap<number, Quantity>,
+  reader: FileReader,
+  where: Where,
+): void {
+  if (values.size === 0) return;
+  const circle = findCircle(list, (slot) => values.get(slot) ?? list[slot]!.value);
+  if (circle)
+    reader.fault(where, {
+      code: 'PARAMETER_CIRCLE',
+      message: `expected parameters that can be worked out one after another, found the circle ${circle.join(' → ')}`,
+      hint: 'give one of them a value of its own in this state',
+    });
+}
+
+/** The names along a circle of parameters, the first repeated at the end, or null. */
+export function findCircle(
+  list: readonly ParameterModel[],
+  valueOf: (slot: number) => Quantity,
+): string[] | null {
+  const done = new Set<number>();
+  const trail: number[] = [];
+  const visit = (slot: number): number[] | null => {
+    if (done.has(slot)) return null;
+    const at = trail.indexOf(slot);
+    if (at >= 0) return [...trail.slice(at), slot];
+    trail.push(slot);
+    for (const read of valueOf(slot).expression.reads) {
+      const circle = visit(read);
+      if (circle) return circle;
+    }
+    trail.pop();
+    done.add(slot);
+    return null;
+  };
+  for (const slot of list.keys()) {
+    const circle = visit(slot);
+    if (circle) return circle.map((s) => list[s]!.name);
+  }
+  return null;
+}
+
