@@ -59,8 +59,12 @@ export const inertia = z.strictObject({
   xz: element.describe('product of inertia'),
   yz: element.describe('product of inertia'),
   matrix: matrix.optional().describe('all nine elements by rows, instead of xx to yz'),
-  about: z.union([z.enum(['centre', 'origin']), triple]).describe("centre, origin (the part's) or a point [x, y, z]"),
-  products: products.optional().describe('negative: Ixy = -∫ x y dm, the tensor element; positive: Pxy = +∫ x y dm'),
+  about: z
+    .union([z.enum(['centre', 'origin']), triple])
+    .describe("centre, origin (the part's) or a point [x, y, z]"),
+  products: products
+    .optional()
+    .describe('negative: Ixy = -∫ x y dm, the tensor element; positive: Pxy = +∫ x y dm'),
 });
 
 /** A body with known mass, centre and inertia. */

@@ -28,7 +28,9 @@ interface ShapeTypes {
 
 type ShapeOf<K extends SolidKey> = ShapeTypes[(typeof SOLID_KEY_SHAPES)[K][0]];
 type Written<K extends SolidKey> = K extends 'box_size' | 'flat_size' ? 'size' : K;
-type KeysOf<S> = S extends { needs: readonly (readonly (infer K)[])[]; may?: readonly (infer M)[] } ? K | M : never;
+type KeysOf<S> = S extends { needs: readonly (readonly (infer K)[])[]; may?: readonly (infer M)[] }
+  ? K | M
+  : never;
 
 /** The keys of one solid as they stand in a file, all text. Which of them are needed is in SOLIDS. */
 export type SolidKeysDocument<N extends SolidName> = {
@@ -58,13 +60,14 @@ const KEY_SCHEMAS = Object.fromEntries(
     key,
     SHAPES[shape].optional().describe(description),
   ]),
-) as Record<SolidKey, z.ZodType>;
+) as unknown as Record<SolidKey, z.ZodType>;
 
 function solidSchema(name: SolidName, { about, needs, may = [] }: SolidKeys): z.ZodType {
   const keys = [...needs.flat(), ...may].map((key) => [writtenKey(key), KEY_SCHEMAS[key]]);
   const shape = Object.fromEntries(keys) as Record<string, z.ZodType>;
   const corners = VERTEX_COUNT[name];
-  if (corners !== undefined) shape.vertices = z.array(triple).length(corners).optional().describe(`${corners} corners [x, y, z]`);
+  if (corners !== undefined)
+    shape.vertices = z.array(triple).length(corners).optional().describe(`${corners} corners [x, y, z]`);
   return z.strictObject(shape).optional().describe(about);
 }
 

@@ -1,5 +1,14 @@
 /** How a key of a solid is written: text, two or three texts in a list, lists of those, or one of a few words. */
-export type KeyShape = 'text' | 'pair' | 'triple' | 'pairs' | 'triples' | 'outlines' | 'faces' | 'unit' | 'fill';
+export type KeyShape =
+  | 'text'
+  | 'pair'
+  | 'triple'
+  | 'pairs'
+  | 'triples'
+  | 'outlines'
+  | 'faces'
+  | 'unit'
+  | 'fill';
 
 /** Every key a solid may have, how it is written and what it says. */
 export const SOLID_KEY_SHAPES = {
@@ -57,13 +66,23 @@ export const SOLIDS = {
   cylinder: { about: 'about z; origin at the centre', needs: [DIAMETER, ['length']] },
   tube: { about: 'about z; origin at the centre', needs: [DIAMETER, WALL, ['length']] },
   elliptical_cylinder: { about: 'along z; origin at the centre', needs: [['flat_size'], ['length']] },
-  half_cylinder: { about: 'the half with y at least 0; origin on the axis, mid-length', needs: [DIAMETER, ['length']] },
+  half_cylinder: {
+    about: 'the half with y at least 0; origin on the axis, mid-length',
+    needs: [DIAMETER, ['length']],
+  },
   sphere: { about: 'origin at the centre', needs: [DIAMETER] },
   hollow_sphere: { about: 'origin at the centre', needs: [DIAMETER, WALL] },
   hemisphere: { about: 'origin at the centre of the base', needs: [DIAMETER] },
-  spherical_cap: { about: 'diameter of the whole sphere; origin at the centre of the base', needs: [DIAMETER, ['height']] },
+  spherical_cap: {
+    about: 'diameter of the whole sphere; origin at the centre of the base',
+    needs: [DIAMETER, ['height']],
+  },
   ellipsoid: { about: 'origin at the centre', needs: [['box_size']] },
-  torus: { about: 'diameter of the centre circle; origin at the centre', needs: [DIAMETER, SECTION], may: ['angle'] },
+  torus: {
+    about: 'diameter of the centre circle; origin at the centre',
+    needs: [DIAMETER, SECTION],
+    may: ['angle'],
+  },
   cone: { about: 'origin at the centre of the base', needs: [DIAMETER, ['height']] },
   frustum: { about: 'origin at the centre of the base', needs: [DIAMETER, TOP_DIAMETER, ['height']] },
   paraboloid: { about: 'apex up; origin at the centre of the base', needs: [DIAMETER, ['height']] },
@@ -73,15 +92,31 @@ export const SOLIDS = {
   extrusion: { about: 'an outline raised from z = 0', needs: [['outline'], ['height']], may: ['holes'] },
   revolve: { about: 'a profile turned about z', needs: [['profile']], may: ['angle'] },
   polyhedron: { about: 'corners and planar faces in its own axes', needs: [['vertices'], ['faces']] },
-  mesh: { about: 'a closed mesh in its own axes', needs: [['file'], ['unit']], may: ['fill', 'thickness', 'weld'] },
+  mesh: {
+    about: 'a closed mesh in its own axes',
+    needs: [['file'], ['unit']],
+    may: ['fill', 'thickness', 'weld'],
+  },
   ring: { about: 'thin circle about z; origin at the centre', needs: [DIAMETER], needsMass: true },
   disk: { about: 'thin; origin at the centre', needs: [DIAMETER], may: ['thickness'] },
   plate: { about: 'thin rectangle; origin at the centre', needs: [['flat_size']], may: ['thickness'] },
   triangle_plate: { about: 'thin triangle of three corners', needs: [['vertices']], may: ['thickness'] },
   spherical_shell: { about: 'thin; origin at the centre', needs: [DIAMETER], may: ['thickness'] },
-  hemispherical_shell: { about: 'thin, open; origin at the centre of the base', needs: [DIAMETER], may: ['thickness'] },
-  cylindrical_shell: { about: 'thin, open ends; origin at the centre', needs: [DIAMETER, ['length']], may: ['thickness'] },
-  conical_shell: { about: 'thin, open; origin at the centre of the base', needs: [DIAMETER, ['height']], may: ['thickness'] },
+  hemispherical_shell: {
+    about: 'thin, open; origin at the centre of the base',
+    needs: [DIAMETER],
+    may: ['thickness'],
+  },
+  cylindrical_shell: {
+    about: 'thin, open ends; origin at the centre',
+    needs: [DIAMETER, ['length']],
+    may: ['thickness'],
+  },
+  conical_shell: {
+    about: 'thin, open; origin at the centre of the base',
+    needs: [DIAMETER, ['height']],
+    may: ['thickness'],
+  },
 } as const satisfies Record<string, SolidKeys>;
 
 /** The name of a solid that has keys. */

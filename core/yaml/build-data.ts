@@ -3,7 +3,14 @@ import { Mapping, type YamlMapping, type YamlValue } from './value.ts';
 
 /** What is wrong with one event; the place and the words are found later, from the events. */
 export interface Complaint {
-  kind: 'duplicate-key' | 'tag' | 'merge-key' | 'key-not-text' | 'unknown-alias' | 'alias-circle' | 'control-character';
+  kind:
+    | 'duplicate-key'
+    | 'tag'
+    | 'merge-key'
+    | 'key-not-text'
+    | 'unknown-alias'
+    | 'alias-circle'
+    | 'control-character';
   event: number;
 }
 
@@ -35,7 +42,12 @@ export function buildData(events: readonly Event[], text: string): BuiltData {
   const complaints: Complaint[] = [];
   const anchors = new Map<string, YamlValue | undefined>();
   const openAnchors: string[] = [];
-  const outer: { list: YamlValue[] | undefined; map: YamlMapping | undefined; key: string | undefined; anchor: string }[] = [];
+  const outer: {
+    list: YamlValue[] | undefined;
+    map: YamlMapping | undefined;
+    key: string | undefined;
+    anchor: string;
+  }[] = [];
   let root: YamlValue = NOTHING;
   let list: YamlValue[] | undefined;
   let map: YamlMapping | undefined;
@@ -128,7 +140,11 @@ export function buildData(events: readonly Event[], text: string): BuiltData {
 function slowScalar(event: ScalarEvent, text: string, complain: (kind: 'control-character') => void): string {
   if (event.valueStart === ABSENT) return NOTHING;
   const value = getScalarValue(text, event);
-  if (event.style === SCALAR_STYLE.DOUBLE_QUOTED && CONTROL_AFTER_ESCAPE.test(value) && !isWellFormed(value)) {
+  if (
+    event.style === SCALAR_STYLE.DOUBLE_QUOTED &&
+    CONTROL_AFTER_ESCAPE.test(value) &&
+    !isWellFormed(value)
+  ) {
     complain('control-character');
   }
   return value;

@@ -42,7 +42,9 @@ function notUtf8(bytes: Uint8Array, file: string): InputError {
   return new InputError([
     {
       code: 'TEXT_NOT_UTF8',
-      message: isUtf16 ? 'the file is UTF-16, not UTF-8' : 'the file is not UTF-8: a byte here belongs to no character',
+      message: isUtf16
+        ? 'the file is UTF-16, not UTF-8'
+        : 'the file is not UTF-8: a byte here belongs to no character',
       at: { file, ...new LineTable(good).placeOf(good.length) },
       hint: 'save the file as UTF-8',
     },

@@ -29,7 +29,8 @@ export function nextValue(events: readonly Event[], index: number): number {
 export function spanOf(events: readonly Event[], index: number, text: string): Span {
   const event = events[index];
   if (event === undefined) return { start: 0, length: 1 };
-  if (event.type === EVENT_ID.MAPPING || event.type === EVENT_ID.SEQUENCE) return { start: event.start, length: 1 };
+  if (event.type === EVENT_ID.MAPPING || event.type === EVENT_ID.SEQUENCE)
+    return { start: event.start, length: 1 };
   if (event.type === EVENT_ID.ALIAS) {
     return { start: event.anchorStart - 1, length: event.anchorEnd - event.anchorStart + 1 };
   }

@@ -12,7 +12,9 @@ const SCALAR_SIZE: ExpandedSize = { nodes: 1, aliases: 0, depth: 0 };
 /** Sums the sizes upwards through the events; what an alias stands for has been summed before it. */
 export function measureExpanded(events: readonly Event[], text: string): ExpandedSize {
   const anchors = new Map<string, ExpandedSize>();
-  const open: { size: ExpandedSize; anchor: string }[] = [{ size: { nodes: 0, aliases: 0, depth: 0 }, anchor: '' }];
+  const open: { size: ExpandedSize; anchor: string }[] = [
+    { size: { nodes: 0, aliases: 0, depth: 0 }, anchor: '' },
+  ];
   const add = (size: ExpandedSize) => {
     const into = open.at(-1)!.size;
     into.nodes += size.nodes;

@@ -97,11 +97,17 @@ export class Places {
   #offsetInScalar(index: number, offset: number): number | undefined {
     const event = this.#allEvents[index];
     if (event?.type !== EVENT_ID.SCALAR || isEmptyPlain(event)) return undefined;
-    if (event.style === SCALAR_STYLE.LITERAL_BLOCK || event.style === SCALAR_STYLE.FOLDED_BLOCK) return undefined;
+    if (event.style === SCALAR_STYLE.LITERAL_BLOCK || event.style === SCALAR_STYLE.FOLDED_BLOCK)
+      return undefined;
     const raw = this.#text.slice(event.valueStart, event.valueEnd);
     if (/[\r\n]/.test(raw)) return undefined;
     if (event.fast) return event.valueStart + Math.min(offset, raw.length);
-    return event.valueStart + rawOffset(raw, offset, (piece) => getScalarValue(piece, { ...event, valueStart: 0, valueEnd: piece.length }));
+    return (
+      event.valueStart +
+      rawOffset(raw, offset, (piece) =>
+        getScalarValue(piece, { ...event, valueStart: 0, valueEnd: piece.length }),
+      )
+    );
   }
 
   /** Walks a path through the events. */
@@ -131,7 +137,8 @@ export class Places {
       while (events[i] !== undefined && events[i]!.type !== EVENT_ID.POP) {
         const value = nextValue(events, i);
         const event = events[i]!;
-        if (event.type === EVENT_ID.SCALAR && getScalarValue(this.#text, event) === step) return { key: i, value };
+        if (event.type === EVENT_ID.SCALAR && getScalarValue(this.#text, event) === step)
+          return { key: i, value };
         i = nextValue(events, value);
       }
     }
@@ -145,7 +152,8 @@ export class Places {
     const name = this.#text.slice(alias.anchorStart, alias.anchorEnd);
     for (let i = index - 1; i > 0; i--) {
       const event = this.#allEvents[i]!;
-      if (event.type === EVENT_ID.POP || event.type === EVENT_ID.DOCUMENT || event.type === EVENT_ID.ALIAS) continue;
+      if (event.type === EVENT_ID.POP || event.type === EVENT_ID.DOCUMENT || event.type === EVENT_ID.ALIAS)
+        continue;
       if (event.anchorStart >= 0 && this.#text.slice(event.anchorStart, event.anchorEnd) === name) return i;
     }
     return index;
@@ -190,7 +198,7 @@ function pair(objects: readonly object[], numbers: readonly number[]): Map<objec
 function rawOffset(raw: string, offset: number, decode: (piece: string) => string): number {
   let at = 0;
   let length = 0;
-  for (const [unit] of raw.matchAll(/\\(?:x..|u....|U.{8}|.)|''|[^]/gs)) {
+  for (const [unit] of raw.matchAll(/\\(?:x..|u....|U.{8}|.)|''|[\s\S]/gs)) {
     if (length >= offset) return at;
     length += unit.length === 1 ? 1 : decode(unit).length;
     at += unit.length;

@@ -73,7 +73,8 @@ class Reader {
       for (const complaint of data.complaints) faults.add(this.#complaint(complaint));
     }
     this.#judgeSize(data, faults);
-    if (data.end < this.#events.length) faults.add(this.#fault(SEVERAL_DOCUMENTS, this.#secondDocument(data.end)));
+    if (data.end < this.#events.length)
+      faults.add(this.#fault(SEVERAL_DOCUMENTS, this.#secondDocument(data.end)));
     else if (isEmptyPlain(this.#events[1]!)) faults.add(this.#fault(EMPTY, 1));
     else if (typeof data.root === 'string' || Array.isArray(data.root)) {
       faults.add(this.#fault(notMapping(Array.isArray(data.root)), 1));
@@ -88,7 +89,8 @@ class Reader {
   #judgeSize(data: BuiltData, faults: FaultList): void {
     if (this.#events.length <= NODES_AT_MOST && data.aliases === 0) return;
     const size = measureExpanded(this.#events, this.#text);
-    if (size.aliases > ALIASES_AT_MOST) faults.add(this.#fault(tooManyAliases(size.aliases), this.#firstAlias()));
+    if (size.aliases > ALIASES_AT_MOST)
+      faults.add(this.#fault(tooManyAliases(size.aliases), this.#firstAlias()));
     if (size.nodes > NODES_AT_MOST) faults.add(tooManyNodes(this.#file).faults[0]!);
     if (size.depth > DEPTH_AT_MOST) faults.add(this.#fault(TOO_DEEP_WORDS, this.#firstAlias()));
   }

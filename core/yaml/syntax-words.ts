@@ -6,23 +6,75 @@ interface Words {
 
 /** The parser's reasons in an engineer's words, by how the reason begins. The first that fits is taken. */
 const WORDS: readonly (readonly [reason: string, message: string, hint?: string])[] = [
-  ['bad indentation of a mapping entry', 'this line is indented unlike the keys around it', 'line the key up with its neighbours; text that contains ": " or starts with a bracket or quote must be quoted as a whole'],
-  ['bad indentation of a sequence entry', 'this line is indented unlike the list around it', 'line the "-" up with the others'],
-  ['deficient indentation', 'this line belongs to a bracket or quote opened above and must be indented further', 'indent the line, or close the bracket or quote'],
+  [
+    'bad indentation of a mapping entry',
+    'this line is indented unlike the keys around it',
+    'line the key up with its neighbours; text that contains ": " or starts with a bracket or quote must be quoted as a whole',
+  ],
+  [
+    'bad indentation of a sequence entry',
+    'this line is indented unlike the list around it',
+    'line the "-" up with the others',
+  ],
+  [
+    'deficient indentation',
+    'this line belongs to a bracket or quote opened above and must be indented further',
+    'indent the line, or close the bracket or quote',
+  ],
   ['tab characters must not', 'a tab is used for indentation', 'indent with spaces'],
-  ["expected ':' after a mapping key", 'expected ":" after the key', 'write "key: value", with a blank after the colon'],
-  ['can not read a block mapping entry; a multiline key', 'expected ":" after the key on this line or the one above', 'write "key: value", with a blank after the colon'],
+  [
+    "expected ':' after a mapping key",
+    'expected ":" after the key',
+    'write "key: value", with a blank after the colon',
+  ],
+  [
+    'can not read a block mapping entry; a multiline key',
+    'expected ":" after the key on this line or the one above',
+    'write "key: value", with a blank after the colon',
+  ],
   ['a whitespace character is expected after the key-value', 'expected a blank after ":"'],
-  ['missed comma between flow', 'expected a comma or the closing bracket here', 'quote text that contains brackets, braces or commas'],
+  [
+    'missed comma between flow',
+    'expected a comma or the closing bracket here',
+    'quote text that contains brackets, braces or commas',
+  ],
   ["expected the node content, but found ','", 'expected a value before the comma'],
-  ['unexpected end of the stream within a flow', 'the file ends inside a [ ] or { } that is never closed', 'close the bracket'],
-  ['unexpected end of the stream within a double', 'the file ends inside a " quote that is never closed', 'close the quote'],
-  ['unexpected end of the stream within a single', "the file ends inside a ' quote that is never closed", 'close the quote'],
-  ['unexpected end of the document within a double', 'the document ends inside a " quote that is never closed', 'close the quote'],
-  ['unexpected end of the document within a single', "the document ends inside a ' quote that is never closed", 'close the quote'],
-  ['unknown escape sequence', 'no such escape after the backslash', "in \" \" write \\\\ for a backslash, or use ' '"],
+  [
+    'unexpected end of the stream within a flow',
+    'the file ends inside a [ ] or { } that is never closed',
+    'close the bracket',
+  ],
+  [
+    'unexpected end of the stream within a double',
+    'the file ends inside a " quote that is never closed',
+    'close the quote',
+  ],
+  [
+    'unexpected end of the stream within a single',
+    "the file ends inside a ' quote that is never closed",
+    'close the quote',
+  ],
+  [
+    'unexpected end of the document within a double',
+    'the document ends inside a " quote that is never closed',
+    'close the quote',
+  ],
+  [
+    'unexpected end of the document within a single',
+    "the document ends inside a ' quote that is never closed",
+    'close the quote',
+  ],
+  [
+    'unknown escape sequence',
+    'no such escape after the backslash',
+    'in " " write \\\\ for a backslash, or use \' \'',
+  ],
   ['expected hexadecimal character', 'expected hexadecimal digits in the escape'],
-  ['end of the stream or a document separator', 'expected the end of the file, a key or a list item', 'quote text that contains brackets, braces, quotes or ": "'],
+  [
+    'end of the stream or a document separator',
+    'expected the end of the file, a key or a list item',
+    'quote text that contains brackets, braces, quotes or ": "',
+  ],
   ['a line break is expected', 'expected the line to end after "|" or ">"'],
   ['bad explicit indentation width', 'the number after "|" or ">" must be 1 to 9'],
   ['repeat of', 'a sign after "|" or ">" is repeated'],
@@ -35,8 +87,21 @@ const WORDS: readonly (readonly [reason: string, message: string, hint?: string]
   ['unacceptable YAML version', 'the %YAML line names a version other than 1.2', 'delete the line'],
 ];
 
-const TAG_REASONS = ['duplication of a tag', 'tag ', 'named tag', 'undeclared tag', 'unexpected end of the stream within a verbatim tag'];
-const DIRECTIVE_REASONS = ['directive', 'YAML directive', 'TAG directive', 'ill-formed', 'there is a previously', 'duplication of %YAML'];
+const TAG_REASONS = [
+  'duplication of a tag',
+  'tag ',
+  'named tag',
+  'undeclared tag',
+  'unexpected end of the stream within a verbatim tag',
+];
+const DIRECTIVE_REASONS = [
+  'directive',
+  'YAML directive',
+  'TAG directive',
+  'ill-formed',
+  'there is a previously',
+  'duplication of %YAML',
+];
 
 /** The words for tags, which an assembly file has none of. */
 export const TAG_WORDS: Words = {
@@ -52,7 +117,11 @@ export function plainWords(reason: string): Words {
   if (words !== undefined) return { code: 'YAML_SYNTAX', message: words[1], hint: words[2] };
   if (TAG_REASONS.some((begin) => reason.startsWith(begin))) return TAG_WORDS;
   if (DIRECTIVE_REASONS.some((begin) => reason.startsWith(begin))) {
-    return { code: 'YAML_SYNTAX', message: 'a line beginning with "%" is not understood', hint: 'delete the line' };
+    return {
+      code: 'YAML_SYNTAX',
+      message: 'a line beginning with "%" is not understood',
+      hint: 'delete the line',
+    };
   }
   return { code: 'YAML_SYNTAX', message: `not YAML: ${reason}` };
 }

@@ -1,0 +1,179 @@
+import type * as z from 'zod';
+import type { Fault } from '../errors.ts';
+import { nearestName } from '../nearest-name.ts';
+import type { Places } from '../yaml/places.ts';
+import type { PathStep, YamlValue } from '../yaml/value.ts';
+import {
+  branchFor,
+  type Definition,
+  definitionAt,
+  expectation,
+  narrow,
+  shapeOfValue,
+  valueAt,
+} from './schema-walk.ts';
+import { SOLIDS } from './solid-keys.ts';
+import { synonymOf } from './synonyms.ts';
+import { found, labelOf, nounOf, shorten } from './words.ts';
+
+type Issue = z.core.$ZodIssue;
+
+/** Lists of known keys longer than this are left to the reference. */
+const KEYS_IN_A_HINT = 14;
+
+/** Turns what zod found into faults with places and words. */
+export class IssueFaults {
+  readonly #schema: z.ZodType;
+  readonly #root: YamlValue;
+  readonly #places: Places;
+
+  constructor(schema: z.ZodType, root: YamlValue, places: Places) {
+    this.#schema = schema;
+    this.#root = root;
+    this.#places = places;
+  }
+
+  /** One issue's faults: one for each unknown key, one for anything else; of a union, those of the branch that fits. */
+  faultsOf(issue: Issue, prefix: readonly PathStep[] = []): Fault[] {
+    const path = [...prefix, ...(issue.path as PathStep[])];
+    switch (issue.code) {
+      case 'unrecognized_keys':
+        return issue.keys.map((key) => this.#unknownKey(path, key));
+      case 'invalid_union':
+        return this.#union(issue.errors, path);
+      case 'invalid_value':
+        return [this.#unknownChoice(path)];
+      case 'too_small':
+      case 'too_big':
+        return [this.#wrongLength(path, issue)];
+      default:
+        return [this.#isMissing(path) ? this.#missingKey(path) : this.#wrongShape(path)];
+    }
+  }
+
+  #union(errors: readonly Issue[][], path: PathStep[]): Fault[] {
+    const definition = definitionAt(this.#schema, path, this.#root);
+    const value = valueAt(this.#root, path);
+    if (value === undefined) return [this.#missingKey(path)];
+    const branch = branchFor(definition?.options ?? [], shapeOfValue(value));
+    const issues = errors[branch];
+    if (issues === undefined || issues.length === 0) return [this.#wrongShape(path)];
+    return issues.flatMap((issue) => this.faultsOf(issue, path));
+  }
+
+  #unknownKey(path: PathStep[], key: string): Fault {
+    const known = this.#knownKeys(path);
+    const isSolid = path.at(-1) === 'solid';
+    const what = isSolid
+      ? `unknown solid '${shorten(key)}'`
+      : `unknown key '${shorten(key)}' in ${nounOf(path)}`;
+    const nearest = nearestName(key, known) ?? synonymOf(key, known);
+    return {
+      code: isSolid ? 'MODEL_UNKNOWN_CHOICE' : 'MODEL_UNKNOWN_KEY',
+      message: nearest === undefined ? what : `${what}; did you mean '${nearest}'?`,
+      ...this.#places.markOfKey([...path, key]),
+      hint:
+        known.length <= KEYS_IN_A_HINT || (isSolid && nearest === undefined)
+          ? `known here: ${known.join(', ')}`
+          : undefined,
+    };
+  }
+
+  #knownKeys(path: PathStep[]): string[] {
+    const definition = definitionAt(this.#schema, path, this.#root);
+    if (definition === undefined) return [];
+    const object = narrow(definition, valueAt(this.#root, path));
+    return Object.keys(object.shape ?? {});
+  }
+
+  #unknownChoice(path: PathStep[]): Fault {
+    const value = valueAt(this.#root, path);
+    if (value === undefined) return this.#missingKey(path);
+    if (typeof value !== 'string' || value === '') return this.#wrongShape(path);
+    const definition = definitionAt(this.#schema, path, this.#root)!;
+    const choices = Object.keys(narrow(definition, value).entries ?? {});
+    const nearest = nearestName(value, choices);
+    const message = `${labelOf(path)} is '${shorten(value)}'; expected ${this.#expected(path, definition)}`;
+    return {
+      code: 'MODEL_UNKNOWN_CHOICE',
+      message: nearest === undefined ? message : `${message}; did you mean '${nearest}'?`,
+      ...this.#places.markOf(path),
+      hint: this.#choiceHint(path, value, choices),
+    };
+  }
+
+  #choiceHint(path: PathStep[], value: string, choices: string[]): string | undefined {
+    if (choices.includes('true')) return 'only "true" and "false" are yes and no here';
+    if (path.at(-1) !== 'solid') return undefined;
+    const solid = synonymOf(value, Object.keys(SOLIDS)) ?? nearestName(value, Object.keys(SOLIDS));
+    return solid === undefined ? undefined : `write its sizes too: solid: { ${solid}: { … } }`;
+  }
+
+  #isMissing(path: PathStep[]): boolean {
+    return typeof path.at(-1) === 'string' && valueAt(this.#root, path) === undefined;
+  }
+
+  #missingKey(path: PathStep[]): Fault {
+    const owner = path.slice(0, -1);
+    return {
+      code: 'MODEL_MISSING_KEY',
+      message: `${nounOf(owner)} needs '${path.at(-1)}'`,
+      ...this.#places.markOf(owner),
+      hint: this.#missingHint(path),
+    };
+  }
+
+  #missingHint(path: PathStep[]): string | undefined {
+    const definition = definitionAt(this.#schema, path, this.#root);
+    if (definition === undefined) return undefined;
+    return `add '${path.at(-1)}': ${this.#expected(path, definition)}`;
+  }
+
+  #wrongShape(path: PathStep[]): Fault {
+    const value = valueAt(this.#root, path);
+    const definition = definitionAt(this.#schema, path, this.#root);
+    const expected = definition === undefined ? 'nothing' : this.#expected(path, definition);
+    return {
+      code: 'MODEL_WRONG_SHAPE',
+      message: `${labelOf(path)} is ${found(value)}; expected ${expected}`,
+      ...this.#places.markOf(path),
+      hint: definition === undefined ? undefined : shapeHint(value, definition, path),
+    };
+  }
+
+  #wrongLength(path: PathStep[], issue: { minimum?: unknown; maximum?: unknown; exact?: boolean }): Fault {
+    const value = valueAt(this.#root, path);
+    const definition = definitionAt(this.#schema, path, this.#root);
+    const count = Array.isArray(value) ? value.length : 0;
+    const items = narrow(definition ?? { type: 'string' }, value).items;
+    const bound = String(issue.minimum ?? issue.maximum);
+    const expected =
+      items !== undefined ? String(items.length) : issue.exact === true ? bound : `at least ${bound}`;
+    return {
+      code: 'MODEL_WRONG_SHAPE',
+      message: `${labelOf(path)} has ${count === 1 ? '1 item' : `${count} items`}; expected ${expected}`,
+      ...this.#places.markOf(path),
+    };
+  }
+
+  #expected(path: PathStep[], definition: Definition): string {
+    if (path.at(-1) === 'solid') return "particle or a mapping with a solid's name";
+    return expectation(definition);
+  }
+}
+
+function shapeHint(
+  value: YamlValue | undefined,
+  definition: Definition,
+  path: readonly PathStep[],
+): string | undefined {
+  const expected = expectation(definition);
+  if (value === '' && expected === 'a mapping')
+    return `write '${path.at(-1)}: {}' when there is nothing to say`;
+  if (value === '' && expected.startsWith('a list'))
+    return 'list the items below it, each after "-", or delete the key';
+  if (expected === 'a list' && typeof value === 'object') return 'put it in a list: [ { … } ]';
+  if (expected === 'a list') return 'put it in a list: [ … ]';
+  if (expected === 'a list of 3 items') return 'write [ x, y, z ]';
+  return undefined;
+}

@@ -1,0 +1,56 @@
+/** Names people try, and ours for them. Looked up only where ours is known and theirs is not. */
+const SYNONYMS: Record<string, readonly string[]> = {
+  position: ['at'],
+  pos: ['at'],
+  location: ['at'],
+  translate: ['at'],
+  offset: ['at'],
+  orientation: ['rotate'],
+  children: ['parts'],
+  components: ['parts'],
+  items: ['parts'],
+  shape: ['solid'],
+  geometry: ['solid'],
+  weight: ['mass'],
+  m: ['mass'],
+  label: ['name'],
+  comment: ['note'],
+  description: ['note', 'about'],
+  title: ['assembly', 'name'],
+  value: ['density'],
+  rho: ['density'],
+  cg: ['centre'],
+  cog: ['centre'],
+  com: ['centre'],
+  subtract: ['cut'],
+  hole: ['cut'],
+  mirror: ['image'],
+  pattern: ['repeat'],
+  copies: ['repeat', 'count'],
+  upper: ['max'],
+  lower: ['min'],
+  sigma: ['u'],
+  tolerance: ['tol'],
+  width: ['size', 'diameter'],
+  dimensions: ['size'],
+  d: ['diameter'],
+  r: ['radius'],
+  h: ['height', 'length'],
+  l: ['length'],
+  inner_diameter: ['bore'],
+  outer_diameter: ['diameter'],
+  cuboid: ['box'],
+  block: ['box'],
+  cube: ['box'],
+  pipe: ['tube'],
+  ball: ['sphere'],
+  disc: ['disk'],
+  stl: ['mesh'],
+};
+
+/** Our name for one that people try, if it is among the known ones. */
+export function synonymOf(name: string, known: readonly string[]): string | undefined {
+  const key = name.toLowerCase();
+  if (!Object.hasOwn(SYNONYMS, key)) return undefined;
+  return SYNONYMS[key]!.find((ours) => known.includes(ours));
+}
