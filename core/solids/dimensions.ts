@@ -1,5 +1,6 @@
 import type { Body } from '../inertia/body.ts';
 import type { Vector3 } from '../linalg/vector3.ts';
+import type { Extent } from '../mesh/extent.ts';
 import type { Vector2 } from './section-moments.ts';
 
 /** A closed plane figure by its corners [m], in either turning sense; the last point need not repeat the first. */
@@ -18,11 +19,7 @@ export type DimensionValue =
 /** A solid's dimensions by key, twins resolved (`resolveTwins`). */
 export type SolidDimensions = Readonly<Record<string, DimensionValue | undefined>>;
 
-/** An axis-aligned box in local axes [m]. */
-export interface Extent {
-  readonly min: Vector3;
-  readonly max: Vector3;
-}
+export type { Extent };
 
 /**
  * What a key's value is: `length` one number [m], `size2`/`size3` two or three lengths, `angle` one number [rad],
