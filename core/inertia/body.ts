@@ -77,4 +77,3 @@ export const scaleBody = (body: Body, k: number): Body =>
         centre: body.centre,
         secondMoments: body.secondMoments.map((q) => q * k) as unknown as Symmetric3,
       };
-

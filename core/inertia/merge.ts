@@ -45,11 +45,7 @@ export function subtractBody(whole: Body, cut: Body): Body {
   const step = cut.mass / mass;
   return {
     mass,
-    centre: [
-      whole.centre[0] + step * d[0],
-      whole.centre[1] + step * d[1],
-      whole.centre[2] + step * d[2],
-    ],
+    centre: [whole.centre[0] + step * d[0], whole.centre[1] + step * d[1], whole.centre[2] + step * d[2]],
     secondMoments: sum(whole, cut, -whole.mass * step, d, -1),
   };
 }

@@ -57,9 +57,17 @@ export function possibleReadings(given: GivenTensor): string[] {
   if (possible(negateProducts(given.inertia), shift)) readings.push("with the products' sign the other way");
   const still: Vector3 = [0, 0, 0];
   if (shift.some((x) => x !== 0) && possible(given.inertia, still)) readings.push('about the centre');
-  if (given.about.some((x) => x !== 0) && given.centre.some((x) => x !== 0) && possible(given.inertia, given.centre))
+  if (
+    given.about.some((x) => x !== 0) &&
+    given.centre.some((x) => x !== 0) &&
+    possible(given.inertia, given.centre)
+  )
     readings.push("about the part's origin");
-  if (shift.every((x) => x === 0) && given.centre.some((x) => x !== 0) && possible(given.inertia, given.centre))
+  if (
+    shift.every((x) => x === 0) &&
+    given.centre.some((x) => x !== 0) &&
+    possible(given.inertia, given.centre)
+  )
     readings.push("about the part's origin");
   for (const order of ORDERS)
     if (possible(reorder(given.inertia, order.slots), shift))

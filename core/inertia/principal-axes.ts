@@ -1,6 +1,6 @@
 import { eigenSymmetric3 } from '../linalg/eigen-symmetric3.ts';
-import { atan2 } from '../math/index.ts';
 import type { Vector3 } from '../linalg/vector3.ts';
+import { atan2 } from '../math/index.ts';
 import { type Body, inertiaAboutCentre } from './body.ts';
 
 export type AxisName = 'x' | 'y' | 'z';
@@ -100,8 +100,16 @@ function freeAxes(moments: Vector3): number[] {
 }
 
 /** Representatives of a free plane: the projections of the body axis least out of it, and the axis square to that. */
-function alignFree(axes: readonly [Vector3, Vector3, Vector3], free: readonly number[]): [Vector3, Vector3, Vector3] {
-  if (free.length === 3) return [[1, 0, 0], [0, 1, 0], [0, 0, 1]];
+function alignFree(
+  axes: readonly [Vector3, Vector3, Vector3],
+  free: readonly number[],
+): [Vector3, Vector3, Vector3] {
+  if (free.length === 3)
+    return [
+      [1, 0, 0],
+      [0, 1, 0],
+      [0, 0, 1],
+    ];
   const fixed = free[0] === 1 ? 0 : 2;
   const n = axes[fixed]!;
   let k = 0;

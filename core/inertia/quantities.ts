@@ -1,8 +1,8 @@
-import { type Body, inertiaAboutCentre, inertiaAboutPoint } from './body.ts';
-import { pointInLocal, type Placement } from './placement.ts';
-import { principalAxes } from './principal-axes.ts';
 import { transpose } from '../linalg/matrix3.ts';
 import { turnSymmetric } from '../linalg/symmetric3.ts';
+import { type Body, inertiaAboutCentre, inertiaAboutPoint } from './body.ts';
+import { type Placement, pointInLocal } from './placement.ts';
+import { principalAxes } from './principal-axes.ts';
 
 /** What a quantity measures, by the name of its SI unit. */
 export type QuantityKind = 'mass' | 'length' | 'inertia' | 'angle';

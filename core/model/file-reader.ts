@@ -1,5 +1,5 @@
 import type { Places } from '../document/index.ts';
-import { type Fault, FaultList } from '../errors.ts';
+import type { Fault, FaultList } from '../errors.ts';
 import { compileExpression, type Expression, ExpressionError, type Lookup } from '../expressions/index.ts';
 import { type Dimension, type FileUnits, PLAIN_UNIT, type Unit, unitFor } from '../units/index.ts';
 import type { Quantity, Uncertainty, Vector3Quantity } from './model.ts';

@@ -1,8 +1,7 @@
-import type { Expression } from '../expressions/index.ts';
-import type { SolidKind } from '../solids/dimensions.ts';
 import type { Places } from '../document/index.ts';
+import type { Expression, SymbolInfo } from '../expressions/index.ts';
+import type { SolidKind } from '../solids/dimensions.ts';
 import type { FileUnits, Unit } from '../units/index.ts';
-import type { SymbolInfo } from '../expressions/index.ts';
 import type { Where } from './where.ts';
 
 /** A quantity of the file: its compiled expression (SI), where it stands, and the uncertainty it declares. */
@@ -72,7 +71,12 @@ export interface GrowthModel {
 
 export type RotateStep =
   | { readonly kind: 'axis'; readonly axis: 'x' | 'y' | 'z'; readonly angle: Quantity }
-  | { readonly kind: 'vector'; readonly axis: Vector3Quantity; readonly angle: Quantity; readonly where: Where }
+  | {
+      readonly kind: 'vector';
+      readonly axis: Vector3Quantity;
+      readonly angle: Quantity;
+      readonly where: Where;
+    }
   | { readonly kind: 'quaternion'; readonly items: readonly Quantity[]; readonly where: Where }
   | { readonly kind: 'matrix'; readonly rows: readonly Vector3Quantity[]; readonly where: Where };
 

@@ -22,7 +22,14 @@ export function findPart(
     const name = segment.replace(COPY, '');
     const next = here.find((p) => p.name === name);
     const repeats = next && (next.placing.repeat.length > 0 || !COPY.test(segment));
-    if (!next || !repeats) return { unknown: segment, nearest: nearestName(name, here.map((p) => p.name)) };
+    if (!next || !repeats)
+      return {
+        unknown: segment,
+        nearest: nearestName(
+          name,
+          here.map((p) => p.name),
+        ),
+      };
     found = next;
     here = childrenOf(next);
   }

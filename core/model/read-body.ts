@@ -8,8 +8,19 @@ import { type Where, within } from './where.ts';
 const SIX = ['xx', 'yy', 'zz', 'xy', 'xz', 'yz'] as const;
 
 /** Position of xx yy zz xy xz yz in a matrix, then of the elements that mirror the products. */
-const IN_MATRIX = [[0, 0], [1, 1], [2, 2], [0, 1], [0, 2], [1, 2]] as const;
-const MIRRORED = [[1, 0], [2, 0], [2, 1]] as const;
+const IN_MATRIX = [
+  [0, 0],
+  [1, 1],
+  [2, 2],
+  [0, 1],
+  [0, 2],
+  [1, 2],
+] as const;
+const MIRRORED = [
+  [1, 0],
+  [2, 0],
+  [2, 1],
+] as const;
 
 /** A bought item with the maker's data. `products` at the file's head counts where the body states none. */
 export function readBody(

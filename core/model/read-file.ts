@@ -1,6 +1,19 @@
-import { readDocument, type AssemblyDocument } from '../document/index.ts';
+import { type AssemblyDocument, readDocument } from '../document/index.ts';
 import { FaultList } from '../errors.ts';
-import { ANGLE, DENSITY, type Dimension, INERTIA, LENGTH, MASS, aDimension, type FileUnits, parseUnit, SI_UNITS, TextError, type Unit } from '../units/index.ts';
+import {
+  ANGLE,
+  aDimension,
+  DENSITY,
+  type Dimension,
+  type FileUnits,
+  INERTIA,
+  LENGTH,
+  MASS,
+  parseUnit,
+  SI_UNITS,
+  TextError,
+  type Unit,
+} from '../units/index.ts';
 import { FileReader } from './file-reader.ts';
 import type { FileModel, FrameModel, Quantity } from './model.ts';
 import { readGrowth } from './read-growth.ts';
@@ -11,10 +24,7 @@ import { readRotate } from './read-placing.ts';
 import { checkOmitted, readStates } from './read-states.ts';
 import { readSweeps } from './read-sweeps.ts';
 import type { TextInput } from './source.ts';
-import { within, type Where } from './where.ts';
-
-/** Heaviest density that anything is made of; more is a slip of units. [kg/m³] */
-const DENSITY_AT_MOST = 25_000;
+import { type Where, within } from './where.ts';
 
 /**
  * Text of one assembly file → its model: names resolved, dimensions checked, expressions compiled.
@@ -115,7 +125,11 @@ function readUnit(text: string, dimension: Dimension, reader: FileReader, where:
     });
   } catch (error) {
     if (!(error instanceof TextError)) throw error;
-    reader.fault(where, { code: error.code, message: error.message, ...(error.hint ? { hint: error.hint } : {}) });
+    reader.fault(where, {
+      code: error.code,
+      message: error.message,
+      ...(error.hint ? { hint: error.hint } : {}),
+    });
   }
   return null;
 }
@@ -139,22 +153,6 @@ function readMaterials(document: AssemblyDocument, reader: FileReader): Map<stri
     materials.set(name, density);
   }
   return materials;
-}
-
-/** @returns the fault of a density that no material has, or null */
-export function densityFault(density: number): { code: string; message: string; hint: string } | null {
-  if (density > 0 && density <= DENSITY_AT_MOST) return null;
-  if (density <= 0)
-    return {
-      code: 'DENSITY_NOT_POSITIVE',
-      message: `expected a density above zero, found ${density} kg/m^3`,
-      hint: 'a cut-out takes the density of its host; write `cut: true` rather than a negative density',
-    };
-  return {
-    code: 'DENSITY_TOO_LARGE',
-    message: `expected a density of at most 25 g/cm^3 (nothing is denser than 22.6), found ${Number((density / 1000).toPrecision(6))} g/cm^3`,
-    hint: 'write its unit with it, for instance 2700 kg/m^3 or 2.7 g/cm^3; a bare number is in the base units of the file',
-  };
 }
 
 function readFrames(document: AssemblyDocument, reader: FileReader): FrameModel[] {

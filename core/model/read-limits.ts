@@ -1,22 +1,19 @@
 import type { LimitDocument } from '../document/index.ts';
 import type { Lookup } from '../expressions/index.ts';
 import { QUANTITIES, type QuantityKind } from '../inertia/quantities.ts';
-import {
-  ANGLE,
-  baseUnitText,
-  type Dimension,
-  INERTIA,
-  LENGTH,
-  MASS,
-  unitFor,
-} from '../units/index.ts';
+import { ANGLE, baseUnitText, type Dimension, INERTIA, LENGTH, MASS, unitFor } from '../units/index.ts';
 import type { FileReader } from './file-reader.ts';
 import type { LimitModel, ParameterModel, PartModel } from './model.ts';
 import { findPart } from './part-paths.ts';
 import { unknownName } from './read-part.ts';
 import { type Where, within } from './where.ts';
 
-const DIMENSIONS: Record<QuantityKind, Dimension> = { mass: MASS, length: LENGTH, inertia: INERTIA, angle: ANGLE };
+const DIMENSIONS: Record<QuantityKind, Dimension> = {
+  mass: MASS,
+  length: LENGTH,
+  inertia: INERTIA,
+  angle: ANGLE,
+};
 
 /**
  * Slots of a limit's symbols: the quantities as judged, then `basic.` and `predicted.` ones, then the parameters.
@@ -89,7 +86,9 @@ function readLimit(
       reader.fault(within(where, 'of'), {
         code: 'MODEL_UNKNOWN_PART',
         message: `expected the path of a part, found '${limit.of}', in which '${found.unknown}' is not one`,
-        hint: found.nearest ? `did you mean '${found.nearest}'?` : 'paths join names with /, such as boom/access hole',
+        hint: found.nearest
+          ? `did you mean '${found.nearest}'?`
+          : 'paths join names with /, such as boom/access hole',
       });
   }
   if (limit.frame !== undefined && !context.frames.includes(limit.frame))

@@ -56,9 +56,7 @@ export function readParameters(
     const value = values.get(name)!;
     const bound = (key: 'min' | 'max') => {
       const text = typeof given === 'string' ? undefined : given[key];
-      return text === undefined
-        ? null
-        : boundQuantity(reader, text, value, within(within(root, name), key));
+      return text === undefined ? null : boundQuantity(reader, text, value, within(within(root, name), key));
     };
     return { name, value, min: bound('min'), max: bound('max') };
   });

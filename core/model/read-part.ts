@@ -1,6 +1,6 @@
 import type { PartDocument } from '../document/index.ts';
-import { DENSITY, MASS } from '../units/index.ts';
 import { nearestName } from '../nearest-name.ts';
+import { DENSITY, MASS } from '../units/index.ts';
 import type { FileReader } from './file-reader.ts';
 import type { FileModel, PartModel, Quantity, ShapeModel } from './model.ts';
 import { readBody } from './read-body.ts';
@@ -93,8 +93,7 @@ function readIncludeState(
   const at = within(where, 'state');
   const theirs = file.states.map((s) => s.name);
   const check = (name: string, place: Where) => {
-    if (!theirs.includes(name))
-      unknownName(context.reader, place, 'state', name, theirs, ` of ${file.path}`);
+    if (!theirs.includes(name)) unknownName(context.reader, place, 'state', name, theirs, ` of ${file.path}`);
     return name;
   };
   if (typeof given === 'string') return check(given, at);
@@ -143,7 +142,14 @@ export function unknownName(
 
 function material(part: PartDocument, context: PartContext, where: Where): Quantity | null {
   const known = context.materials.get(part.material!);
-  if (!known) unknownName(context.reader, within(where, 'material'), 'material', part.material!, context.materials.keys());
+  if (!known)
+    unknownName(
+      context.reader,
+      within(where, 'material'),
+      'material',
+      part.material!,
+      context.materials.keys(),
+    );
   return known ?? null;
 }
 

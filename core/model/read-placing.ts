@@ -34,7 +34,8 @@ export function readRotate(list: RotateDocument | undefined, reader: FileReader,
     if ('matrix' in step && step.matrix) {
       const at = within(here, 'matrix');
       const rows = step.matrix.map(
-        (row: readonly QuantityDocument[], r: number) => numbers(row, within(at, r)) as unknown as Vector3Quantity,
+        (row: readonly QuantityDocument[], r: number) =>
+          numbers(row, within(at, r)) as unknown as Vector3Quantity,
       );
       return { kind: 'matrix', rows, where: at };
     }

@@ -1,6 +1,6 @@
 import type { PartDocument, SolidDocument } from '../document/index.ts';
-import { ANGLE, LENGTH, PLAIN_UNIT, parseUnit, TextError } from '../units/index.ts';
 import { checkNames, type KeyKind, type SolidKind, solidByName } from '../solids/index.ts';
+import { ANGLE, LENGTH, PLAIN_UNIT, parseUnit, TextError } from '../units/index.ts';
 import type { FileReader, QuantityDocument } from './file-reader.ts';
 import type { DimensionModel, ShapeModel } from './model.ts';
 import { type Where, within } from './where.ts';
@@ -12,7 +12,8 @@ type Nested = QuantityDocument | readonly Nested[];
 export function readSolid(solid: SolidDocument, reader: FileReader, partWhere: Where): ShapeModel {
   const where = within(partWhere, 'solid');
   const name = typeof solid === 'string' ? solid : Object.keys(solid)[0]!;
-  const given = typeof solid === 'string' ? {} : ((solid as Record<string, Record<string, Nested>>)[name] ?? {});
+  const given =
+    typeof solid === 'string' ? {} : ((solid as Record<string, Record<string, Nested>>)[name] ?? {});
   const at = typeof solid === 'string' ? where : within(where, name);
   if (name === 'mesh') return readMesh(given as Record<string, string>, reader, at);
   const kind = solidByName(name)!;
@@ -50,8 +51,10 @@ export function readSolid(solid: SolidDocument, reader: FileReader, partWhere: W
 }
 
 function readDimension(value: Nested, kind: KeyKind, reader: FileReader, where: Where): DimensionModel {
-  if (Array.isArray(value)) return value.map((v, i) => readDimension(v as Nested, kind, reader, within(where, i)));
-  const field = kind === 'angle' ? reader.unitOf(ANGLE) : kind === 'faces' ? PLAIN_UNIT : reader.unitOf(LENGTH);
+  if (Array.isArray(value))
+    return value.map((v, i) => readDimension(v as Nested, kind, reader, within(where, i)));
+  const field =
+    kind === 'angle' ? reader.unitOf(ANGLE) : kind === 'faces' ? PLAIN_UNIT : reader.unitOf(LENGTH);
   return reader.quantity(value as QuantityDocument, field, where);
 }
 

@@ -30,7 +30,11 @@ export function readStates(
 }
 
 /** `omit:` names parts by path; checked once the parts are read. */
-export function checkOmitted(states: readonly StateModel[], parts: readonly PartModel[], reader: FileReader): void {
+export function checkOmitted(
+  states: readonly StateModel[],
+  parts: readonly PartModel[],
+  reader: FileReader,
+): void {
   for (const state of states)
     state.omit.forEach((path, i) => {
       const found = findPart(parts, path);
@@ -38,7 +42,9 @@ export function checkOmitted(states: readonly StateModel[], parts: readonly Part
       reader.fault(within(within(state.where, 'omit'), i), {
         code: 'MODEL_UNKNOWN_PART',
         message: `expected the path of a part, found '${path}', in which '${found.unknown}' is not one`,
-        hint: found.nearest ? `did you mean '${found.nearest}'?` : 'paths join names with /, such as boom/access hole',
+        hint: found.nearest
+          ? `did you mean '${found.nearest}'?`
+          : 'paths join names with /, such as boom/access hole',
       });
     });
 }
@@ -63,7 +69,7 @@ function checkCircle(
 /** The names along a circle of parameters, the first repeated at the end, or null. */
 export function findCircle(
   list: readonly ParameterModel[],
-  valueOf: (slot: number) => Quantity,
+  quantityOf: (slot: number) => Quantity,
 ): string[] | null {
   const done = new Set<number>();
   const trail: number[] = [];
@@ -72,7 +78,7 @@ export function findCircle(
     const at = trail.indexOf(slot);
     if (at >= 0) return [...trail.slice(at), slot];
     trail.push(slot);
-    for (const read of valueOf(slot).expression.reads) {
+    for (const read of quantityOf(slot).expression.reads) {
       const circle = visit(read);
       if (circle) return circle;
     }
@@ -86,4 +92,3 @@ export function findCircle(
   }
   return null;
 }
-

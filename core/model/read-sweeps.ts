@@ -1,10 +1,10 @@
 import type { SweepDocument } from '../document/index.ts';
-import { ExpressionError, parseExpression, namesIn } from '../expressions/index.ts';
+import { ExpressionError, namesIn, parseExpression } from '../expressions/index.ts';
 import { PLAIN_UNIT } from '../units/index.ts';
 import type { FileReader } from './file-reader.ts';
 import type { SweepModel } from './model.ts';
-import { boundQuantity, type Parameters } from './read-parameters.ts';
 import { limitLookup } from './read-limits.ts';
+import { boundQuantity, type Parameters } from './read-parameters.ts';
 import { unknownName } from './read-part.ts';
 import { within } from './where.ts';
 
@@ -19,7 +19,8 @@ export function readSweeps(
   return Object.entries(sweeps ?? {}).map(([name, sweep]) => {
     const where = within(within(null, 'sweeps'), name);
     sweep.states?.forEach((state, i) => {
-      if (!states.includes(state)) unknownName(reader, within(within(where, 'states'), i), 'state', state, states);
+      if (!states.includes(state))
+        unknownName(reader, within(within(where, 'states'), i), 'state', state, states);
     });
     sweep.keep?.forEach((text, i) => {
       const at = within(within(where, 'keep'), i);
@@ -50,13 +51,19 @@ export function readSweeps(
           boundQuantity(reader, text, like, within(at, key));
         if (Array.isArray(given))
           return [
-            { slot: symbol.slot, range: { kind: 'list' as const, values: given.map((v, i) => quantity(v, i)) } },
+            {
+              slot: symbol.slot,
+              range: { kind: 'list' as const, values: given.map((v, i) => quantity(v, i)) },
+            },
           ];
         const range = given as { from: string; to: string; step?: string; count?: string };
         const ends = { from: quantity(range.from, 'from'), to: quantity(range.to, 'to') };
         return [
           range.step !== undefined
-            ? { slot: symbol.slot, range: { kind: 'step' as const, ...ends, step: quantity(range.step, 'step') } }
+            ? {
+                slot: symbol.slot,
+                range: { kind: 'step' as const, ...ends, step: quantity(range.step, 'step') },
+              }
             : {
                 slot: symbol.slot,
                 range: {

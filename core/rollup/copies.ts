@@ -1,8 +1,8 @@
-import { rotationSineCosine } from '../math/index.ts';
-import type { Matrix3 } from '../linalg/symmetric3.ts';
-import { apply } from '../linalg/matrix3.ts';
-import { scale, subtract, type Vector3 } from '../linalg/vector3.ts';
 import { compose, IN_PLACE, type Placement } from '../inertia/placement.ts';
+import { apply } from '../linalg/matrix3.ts';
+import type { Matrix3 } from '../linalg/symmetric3.ts';
+import { scale, subtract, type Vector3 } from '../linalg/vector3.ts';
+import { rotationSineCosine } from '../math/index.ts';
 
 export type Plane = 'xy' | 'xz' | 'yz';
 
@@ -13,9 +13,21 @@ export type Repeat =
   | { kind: 'mirror'; plane: Plane };
 
 const MIRRORS: Record<Plane, Matrix3> = {
-  xy: [[1, 0, 0], [0, 1, 0], [0, 0, -1]],
-  xz: [[1, 0, 0], [0, -1, 0], [0, 0, 1]],
-  yz: [[-1, 0, 0], [0, 1, 0], [0, 0, 1]],
+  xy: [
+    [1, 0, 0],
+    [0, 1, 0],
+    [0, 0, -1],
+  ],
+  xz: [
+    [1, 0, 0],
+    [0, -1, 0],
+    [0, 0, 1],
+  ],
+  yz: [
+    [-1, 0, 0],
+    [0, 1, 0],
+    [0, 0, 1],
+  ],
 };
 
 /** The mirror image in a plane through the parent's origin. */
@@ -28,9 +40,23 @@ export const mirrorIn = (plane: Plane): Placement => ({ turn: MIRRORS[plane], of
  */
 export function turnAbout(axis: 'x' | 'y' | 'z', angle: number): Matrix3 {
   const { sine: s, cosine: c } = rotationSineCosine(angle);
-  if (axis === 'x') return [[1, 0, 0], [0, c, -s], [0, s, c]];
-  if (axis === 'y') return [[c, 0, s], [0, 1, 0], [-s, 0, c]];
-  return [[c, -s, 0], [s, c, 0], [0, 0, 1]];
+  if (axis === 'x')
+    return [
+      [1, 0, 0],
+      [0, c, -s],
+      [0, s, c],
+    ];
+  if (axis === 'y')
+    return [
+      [c, 0, s],
+      [0, 1, 0],
+      [-s, 0, c],
+    ];
+  return [
+    [c, -s, 0],
+    [s, c, 0],
+    [0, 0, 1],
+  ];
 }
 
 /**

@@ -1,0 +1,211 @@
+import { type Moments, netBody, netMass } from '../inertia/balance-sum.ts';
+import { scaleBody } from '../inertia/body.ts';
+import { compose as composeCopy, IN_PLACE } from '../inertia/placement.ts';
+import { judgeBody } from '../inertia/possibility.ts';
+import type { FileModel, PartModel } from '../model/model.ts';
+import { formatQuantity, MASS, unitFor } from '../units/index.ts';
+import { onBoth, placeMoments, scaleMoments, sumAndClose, turnToCut } from './both-moments.ts';
+import { copiesOf } from './copies.ts';
+import { warnIfCutLeavesHost } from './cut-extent.ts';
+import { growthOf, growthTablesOf } from './growth.ts';
+import { ownBody } from './own-body.ts';
+import { fillParameters } from './parameter-values.ts';
+import { ORIGIN, placementOf, repeatsOf } from './placing.ts';
+import { evaluate, faultAt, type Scope } from './scope.ts';
+import type { Both, Member, PartNode } from './tree.ts';
+import { impossible } from './vendor-body.ts';
+
+/** What goes down from a part to its children. */
+interface Inherited {
+  readonly maturity: string | null;
+  readonly category: string | null;
+  readonly basis: string | null;
+  /** Density of the nearest solid around, for cuts [kg/m³]. */
+  readonly hostDensity: number | null;
+}
+
+export const NOTHING_INHERITED: Inherited = {
+  maturity: null,
+  category: null,
+  basis: null,
+  hostDensity: null,
+};
+
+/** Evaluates parts that stand side by side; those that the state leaves out are absent. */
+export function membersOf(
+  parts: readonly PartModel[],
+  prefix: string,
+  inherited: Inherited,
+  scope: Scope,
+): Member[] {
+  return parts.flatMap((part) => memberOf(part, prefix, inherited, scope) ?? []);
+}
+
+function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: Scope): Member | null {
+  const path = prefix + part.name;
+  if (part.states && !part.states.includes(scope.state.name)) return null;
+  if (scope.state.omit.includes(path)) return null;
+  const node = nodeOf(part, path, inherited, scope);
+  if (!node) return null;
+  const anchor = part.placing.anchor === 'centroid' ? (node.own?.body.centre ?? ORIGIN) : ORIGIN;
+  const placement = placementOf(part.placing, anchor, scope);
+  if (part.placing.repeat.length === 0)
+    return { kind: 'one', name: part.name, node, placement, moments: placeMoments(placement, node.moments) };
+  const placed = placeMoments(placement, node.moments);
+  const copies = copiesOf(repeatsOf(part.placing.repeat, scope)).flatMap((copy, i) => {
+    const name = `${part.name}[${i + 1}]`;
+    if (scope.state.omit.includes(`${prefix}${name}`)) return [];
+    return {
+      kind: 'one' as const,
+      name,
+      node,
+      placement: copy === IN_PLACE ? placement : composeCopy(copy, placement),
+      moments: placeMoments(copy, placed),
+    };
+  });
+  return { kind: 'copies', name: part.name, copies, moments: sumAndClose(copies.map((c) => c.moments)) };
+}
+
+function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scope): PartNode | null {
+  const maturity = part.maturity ?? inherited.maturity;
+  const category = part.category ?? inherited.category;
+  const basis = part.basis ?? inherited.basis;
+  const own = ownBody(part, part.cut ? inherited.hostDensity : null, scope);
+  const ownExpected = part.shape.kind !== 'group' && part.shape.kind !== 'include';
+  if (ownExpected && !own) return null;
+  const attributes = { maturity, category, basis };
+  const growth = own || part.override ? growthOf(part, path, attributes, own !== null, scope) : 0;
+  const hostDensity =
+    own?.density ?? part.density?.expression.evaluate(scope.values) ?? inherited.hostDensity;
+  const members =
+    part.shape.kind === 'include'
+      ? includedMembers(part, part.shape, path, attributes, scope)
+      : membersOf(part.parts, `${path}/`, { ...attributes, hostDensity }, scope);
+  const items: Both<Moments>[] = members.map((m) => m.moments);
+  if (own) items.unshift(ownMoments(own.body, growth));
+  const sum = items.length === 1 ? items[0]! : sumAndClose(items);
+  warnIfCutLeavesHost(own, members, scope);
+  const override = overrideOf(part, path, sum, growth, scope);
+  const factor = override?.factor ?? { basic: 1, predicted: 1 };
+  const scaled =
+    factor.basic === 1 && factor.predicted === 1
+      ? sum
+      : {
+          basic: scaleMoments(sum.basic, factor.basic),
+          predicted: scaleMoments(sum.predicted, factor.predicted),
+        };
+  const node: PartNode = {
+    part,
+    scope,
+    ...attributes,
+    growth,
+    own,
+    members,
+    factor,
+    moments: part.cut ? onBoth(scaled, turnToCut) : scaled,
+    overridden: override?.overridden ?? null,
+  };
+  if (members.length > 0) judgeGroup(node, path, scaled.basic, scope);
+  return node;
+}
+
+function ownMoments(body: Parameters<typeof scaleBody>[0], growth: number): Both<Moments> {
+  const basic = { material: body, cut: null };
+  return { basic, predicted: growth === 0 ? basic : { material: scaleBody(body, 1 + growth), cut: null } };
+}
+
+/** An override scales the net of children and cuts to the new mass, the centre kept. */
+function overrideOf(part: PartModel, path: string, sum: Both<Moments>, growth: number, scope: Scope) {
+  if (!part.override) return null;
+  const { basic } = sum;
+  const from = netMass(basic);
+  const to = evaluate(part.override.mass, scope);
+  if (!(from > 0) || !(to > 0)) {
+    const say = (m: number) => formatQuantity(Number(m.toPrecision(12)), unitFor(MASS, scope.file.units));
+    faultAt(scope, part.override.where, {
+      code: 'OVERRIDE_NOT_POSITIVE',
+      message:
+        to > 0
+          ? `expected '${path}' to have a mass above zero that an override can scale, found ${say(from)}`
+          : `expected an override to a mass above zero, found ${say(to)}`,
+      hint:
+        to > 0 ? 'give the parts masses first' : 'to leave the part out of a state, use `omit` or `states`',
+    });
+    return null;
+  }
+  const before = netMass(sum.predicted);
+  const predicted = part.maturity !== null ? to * (1 + growth) : to * (before / from);
+  return {
+    factor: { basic: to / from, predicted: predicted / before },
+    overridden: { from, to },
+  };
+}
+
+function judgeGroup(node: PartNode, path: string, moments: Moments, scope: Scope): void {
+  const body = netBody(moments);
+  if (!body) return;
+  const possibility = judgeBody(body);
+  if (possibility.possible) return;
+  faultAt(scope, node.part.where, {
+    code: 'ASSEMBLY_IMPOSSIBLE',
+    message: impossible(path, possibility, scope),
+    hint: 'a cut-out takes away more than is there: see that each lies wholly in the material of its host',
+  });
+}
+
+/** The parts of an included file, evaluated in a scope of its own. */
+function includedMembers(
+  part: PartModel,
+  shape: PartModel['shape'] & { kind: 'include' },
+  path: string,
+  attributes: Omit<Inherited, 'hostDensity'>,
+  scope: Scope,
+): Member[] {
+  const { file } = shape;
+  const set = new Map([...shape.with].map(([slot, quantity]) => [slot, evaluate(quantity, scope)]));
+  const inner = openScope(
+    file,
+    includedState(part, shape, scope),
+    set,
+    scope.run,
+    `${scope.prefix}${path}/`,
+    scope,
+  );
+  return inner ? membersOf(file.parts, '', { ...attributes, hostDensity: null }, inner) : [];
+}
+
+function includedState(
+  part: PartModel,
+  shape: PartModel['shape'] & { kind: 'include' },
+  scope: Scope,
+): string {
+  const { file, state } = shape;
+  const named = typeof state === 'string' ? state : state?.get(scope.state.name);
+  if (named !== undefined) return named;
+  const same = file.states.find((s) => s.name === scope.state.name);
+  if (same) return same.name;
+  if (file.states.length === 1) return file.states[0]!.name;
+  faultAt(scope, shape.where, {
+    code: 'INCLUDE_STATE_MISSING',
+    message: `expected a state of ${file.path} for '${part.name}' in state '${scope.state.name}', found none named`,
+    hint: `add \`state: { ${scope.state.name}: ${file.states[0]!.name} }\`; it has ${file.states.map((s) => s.name).join(', ')}`,
+  });
+  scope.run.faults.check();
+  return file.states[0]!.name;
+}
+
+/** A scope for one file at one state, its parameters and growth allowances evaluated. */
+export function openScope(
+  file: FileModel,
+  stateName: string,
+  set: ReadonlyMap<number, number>,
+  run: Scope['run'],
+  prefix: string,
+  outer: Scope | null,
+): Scope {
+  const state = file.states.find((s) => s.name === stateName)!;
+  const values = new Float64Array(file.parameters.length);
+  const bare: Scope = { run, file, state, values, growth: outer?.growth ?? null, prefix };
+  fillParameters(bare, set);
+  return file.growth ? { ...bare, growth: growthTablesOf(file.growth, bare) } : bare;
+}

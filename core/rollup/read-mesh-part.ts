@@ -1,0 +1,43 @@
+import { InputError } from '../errors.ts';
+import type { Body } from '../inertia/body.ts';
+import { MeshError, meshBody } from '../mesh/index.ts';
+import type { ShapeModel } from '../model/model.ts';
+import { within } from '../model/where.ts';
+import type { Extent } from '../solids/index.ts';
+import { evaluate, faultAt, type Scope } from './scope.ts';
+
+/** A mesh file as a part uses it: unit density (or unit mass per area), in metres. */
+export interface MeshReading {
+  readonly body: Body;
+  readonly extent: Extent;
+  readonly notes: readonly { code: string; message: string }[];
+}
+
+/** Reads a part's mesh once for each way that parts use it; a fault comes back as null. */
+export function readMeshPart(shape: ShapeModel & { kind: 'mesh' }, scope: Scope): MeshReading | null {
+  const { run } = scope;
+  const weld = shape.weld ? evaluate(shape.weld, scope) : 0;
+  try {
+    const path = run.source.resolve(scope.file.path, shape.file);
+    const key = [path, shape.unit.name, shape.fill, weld].join('\n');
+    const known = run.meshes.get(key);
+    if (known) return known;
+    const { bytes, sha256 } = run.source.readBytes(path);
+    run.meshInputs.set(path, { sha256, bytes: bytes.length });
+    const reading = meshBody(bytes, { unit: shape.unit, fill: shape.fill, weld });
+    run.meshes.set(key, reading);
+    return reading;
+  } catch (error) {
+    const where = within(shape.where, 'file');
+    if (error instanceof MeshError)
+      faultAt(scope, where, {
+        code: error.code,
+        message: `${shape.file}: ${error.message}`,
+        ...(error.hint ? { hint: error.hint } : {}),
+      });
+    else if (error instanceof InputError)
+      for (const { at: _, ...fault } of error.faults) faultAt(scope, where, fault);
+    else throw error;
+    return null;
+  }
+}

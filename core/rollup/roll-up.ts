@@ -1,0 +1,122 @@
+import { FaultList, InputError, type Warning } from '../errors.ts';
+import { type Moments, netMass } from '../inertia/balance-sum.ts';
+import type { Body } from '../inertia/body.ts';
+import { judgeBody } from '../inertia/possibility.ts';
+import type { Project } from '../model/load-project.ts';
+import { nearestName } from '../nearest-name.ts';
+import { sumAndClose } from './both-moments.ts';
+import { warnIfCutLeavesHost } from './cut-extent.ts';
+import { membersOf, NOTHING_INHERITED, openScope } from './part-tree.ts';
+import { faultAt, type Run, type Scope } from './scope.ts';
+import { type Both, type Leaf, leavesOf, type Member, netBodies } from './tree.ts';
+import { impossible } from './vendor-body.ts';
+
+/** One assembly in one state, rolled up. */
+export interface RollUp {
+  readonly project: Project;
+  readonly state: string;
+  readonly scope: Scope;
+  readonly members: readonly Member[];
+  readonly leaves: readonly Leaf[];
+  readonly moments: Both<Moments>;
+  /** The whole, in body axes. */
+  readonly total: Both<Body>;
+  readonly warnings: readonly Warning[];
+  readonly meshInputs: ReadonlyMap<string, { sha256: string; bytes: number }>;
+}
+
+export interface RollUpOptions {
+  readonly state: string;
+  /** Values from outside for the top file's parameters, by slot [SI]. */
+  readonly set?: ReadonlyMap<number, number>;
+  /** Meshes read by an earlier roll-up of the same source, to be used again. */
+  readonly meshes?: Run['meshes'];
+  readonly meshInputs?: Run['meshInputs'];
+}
+
+/**
+ * Rolls an assembly up in one state.
+ *
+ * @throws InputError with every fault of the parts: impossible solids and tensors, masses, rotations, meshes
+ */
+export function rollUp(project: Project, options: RollUpOptions): RollUp {
+  const { root, source } = project;
+  checkState(project, options.state);
+  const run: Run = {
+    source,
+    faults: new FaultList(),
+    warnings: [],
+    meshes: options.meshes ?? new Map(),
+    meshInputs: options.meshInputs ?? new Map(),
+    withoutMaturity: [],
+  };
+  const scope = openScope(root, options.state, options.set ?? new Map(), run, '', null);
+  run.faults.check();
+  const members = membersOf(root.parts, '', NOTHING_INHERITED, scope);
+  run.faults.check();
+  warnIfCutLeavesHost(null, members, scope);
+  const moments = members.length > 0 ? sumAndClose(members.map((m) => m.moments)) : EMPTY;
+  const total = netBodies(moments);
+  if (!total.basic || !total.predicted) {
+    faultAt(scope, null, {
+      code: 'ASSEMBLY_NO_MASS',
+      message: `expected a total mass above zero in state '${options.state}', found ${netMass(moments.basic)} kg`,
+      hint: 'the cut-outs may weigh as much as the material, or every part be left out of this state',
+    });
+    run.faults.check();
+  }
+  const body = total as Both<Body>;
+  const possibility = judgeBody(body.basic);
+  if (!possibility.possible)
+    faultAt(scope, null, {
+      code: 'ASSEMBLY_IMPOSSIBLE',
+      message: impossible('the whole', possibility, scope),
+      hint: 'a cut-out takes away more than is there: see that each lies wholly in the material of its host',
+    });
+  run.faults.check();
+  warnWithoutMaturity(run);
+  return {
+    project,
+    state: options.state,
+    scope,
+    members,
+    leaves: [...leavesOf(members)],
+    moments,
+    total: body,
+    warnings: run.warnings,
+    meshInputs: run.meshInputs,
+  };
+}
+
+const EMPTY: Both<Moments> = {
+  basic: { material: null, cut: null },
+  predicted: { material: null, cut: null },
+};
+
+function checkState(project: Project, state: string): void {
+  const names = project.root.states.map((s) => s.name);
+  if (names.includes(state)) return;
+  const nearest = nearestName(state, names);
+  throw new InputError([
+    {
+      code: 'MODEL_UNKNOWN_STATE',
+      message: `expected a state of ${project.root.path}, found '${state}'`,
+      hint: nearest ? `did you mean '${nearest}'?` : `known: ${names.join(', ')}`,
+    },
+  ]);
+}
+
+const NAMED_AT_MOST = 3;
+
+/** One warning for all parts that a growth table cannot judge, so that a large file is not flooded. */
+function warnWithoutMaturity(run: Run): void {
+  const list = run.withoutMaturity;
+  if (list.length === 0) return;
+  const named = list.slice(0, NAMED_AT_MOST).map((p) => p.path);
+  const more = list.length - named.length;
+  run.warnings.push({
+    code: 'GROWTH_NO_MATURITY',
+    message: `no maturity, so no growth allowance (0 %), on ${named.join(', ')}${more > 0 ? ` and ${more} more` : ''}`,
+    at: list[0]!.at,
+  });
+}
