@@ -8,7 +8,7 @@ export function writeIdentification({ record, sheet, units, products, today }: R
   sheet.say(sourceText(record), { hang: 2 });
   sheet.say(axesText(record.conventions), { hang: 2 });
   sheet.say(
-    `${productsText(products)} · ${[units.length, units.mass, units.inertia, units.angle].map((u) => u.text).join(', ')}`,
+    `${productsText(products)} · units ${[units.length, units.mass, units.inertia, units.angle].map((u) => u.text).join(', ')}`,
     { hang: 2 },
   );
   const verdict = verdictText(record, today);

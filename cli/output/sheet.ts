@@ -5,7 +5,7 @@ import { padEnd, padStart, textWidth, wrap } from './text-width.ts';
 
 type Paint = (text: string) => string;
 
-/** One cell: its text, how it is painted, and whether figures align at its right end. */
+/** One cell: its text and how it is painted. */
 export interface Cell {
   readonly text: string;
   readonly paint?: Paint | undefined;
@@ -43,11 +43,7 @@ export class Sheet {
     text: string,
     { paint, indent = 0, hang = indent }: { paint?: Paint | undefined; indent?: number; hang?: number } = {},
   ): void {
-    const plain = this.plain(text);
-    const first = wrap(plain, this.width - indent)[0]!;
-    const lines = [first];
-    const rest = plain.slice(first.length).replace(/^ /, '');
-    if (rest !== '') lines.push(...wrap(rest, this.width - hang));
+    const lines = wrap(this.plain(text), this.width - hang, this.width - indent);
     lines.forEach((line, i) => {
       this.#lines.push(' '.repeat(i === 0 ? indent : hang) + (paint ?? same)(line));
     });
@@ -114,15 +110,20 @@ export class Sheet {
     // Nothing is padded at the end of a line, where colour would keep the spaces.
     const aligned = (text: string, { align }: Column, k: number) =>
       align === 'right' ? padStart(text, widths[k]!) : k === last ? text : padEnd(text, widths[k]!);
-    const set = (parts: string[]) =>
-      this.#lines.push((' '.repeat(indent) + parts.join(' '.repeat(gap))).trimEnd());
+    const set = (cells: readonly Cell[]) => {
+      const end = cells.findLastIndex((cell) => cell.text.trim() !== '');
+      const parts = cells
+        .slice(0, end + 1)
+        .map((cell, k) => (cell.paint ?? same)(k === end ? cell.text.trimEnd() : cell.text));
+      this.#lines.push(' '.repeat(indent) + parts.join(' '.repeat(gap)));
+    };
     const depth = Math.max(...heads.map((h) => h.length));
     if (heads.some((h) => h.join('') !== ''))
       for (let d = 0; d < depth; d++)
         set(
           columns.map((c, k) => {
             const text = heads[k]![d - (depth - heads[k]!.length)] ?? '';
-            return this.ink.soft(aligned(text, c, k));
+            return { text: aligned(text, c, k), paint: this.ink.soft };
           }),
         );
     texts.forEach((row, r) => {
@@ -143,7 +144,7 @@ export class Sheet {
             below.push(text);
             text = '';
           }
-          return (cells[k]?.paint ?? same)(aligned(text, c, k));
+          return { text: aligned(text, c, k), paint: cells[k]?.paint };
         }),
       );
       for (const text of below)

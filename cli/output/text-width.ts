@@ -38,24 +38,28 @@ export const padEnd = (text: string, width: number) =>
 export const padStart = (text: string, width: number) =>
   ' '.repeat(Math.max(0, width - textWidth(text))) + text;
 
-/** Lines no wider than `width`, broken at spaces, and inside a word only where it alone is wider. */
-export function wrap(text: string, width: number): string[] {
+/**
+ * Lines no wider than `width`, the first no wider than `firstWidth`, broken at spaces, and inside a word only where it
+ * alone is wider.
+ */
+export function wrap(text: string, width: number, firstWidth = width): string[] {
   const lines: string[] = [];
-  let line = '';
+  const room = () => (lines.length === 0 ? firstWidth : width);
+  let line: string | undefined;
   for (const word of text.split(' ')) {
-    if (line !== '' && textWidth(line) + 1 + textWidth(word) <= width) {
+    if (line !== undefined && textWidth(line) + 1 + textWidth(word) <= room()) {
       line += ` ${word}`;
       continue;
     }
-    if (line !== '') lines.push(line);
+    if (line !== undefined) lines.push(line);
     line = word;
-    while (textWidth(line) > width) {
-      const [head, tail] = splitAt(line, width);
+    while (textWidth(line) > room()) {
+      const [head, tail]: [string, string] = splitAt(line, room());
       lines.push(head);
       line = tail;
     }
   }
-  if (line !== '' || lines.length === 0) lines.push(line);
+  lines.push(line ?? '');
   return lines;
 }
 

@@ -245,7 +245,7 @@ describe('renderRun', () => {
       'Heron tail boom, flight',
       '4e1c09b on main · stamp 9f2c81aa03d1 · steelyard 0.1.0',
       'body axes x forward, y left, z up; origin at wing spar at centreline',
-      'products negative, I_xy = −∫xy dm · mm, g, g·mm², °',
+      'products negative, I_xy = −∫xy dm · units mm, g, g·mm², °',
       '3 limits: 2 within, 1 outside',
     ]);
   });
