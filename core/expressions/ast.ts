@@ -43,7 +43,8 @@ export interface CallAst extends Span {
   readonly arguments: readonly Ast[];
 }
 
-/** An expression as written, parentheses and unary plus dropped. Spans are offsets in its text. */
+/** An expression as written, parentheses and unary plus dropped. Spans are offsets in its text and include
+ * a part's own parentheses, but for a name's. */
 export type Ast = NumberAst | NameAst | NegateAst | PercentAst | BinaryAst | CompareAst | CallAst;
 
 /** The nodes one step down, in the order of the text. */

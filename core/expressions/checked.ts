@@ -8,9 +8,9 @@ import type { BinaryOperation, UnaryOperation } from './operations.ts';
 // Values come from it by `compileNode` (compile.ts): each node becomes a closure over its operands' closures.
 // Exact derivatives come from the same tree in the same way, when uncertainty asks for them: a second walk that turns
 // each node into a function of (parameters, base, slot) giving a dual number, the value and its derivative by that slot,
-// by the rule of each operation below (there are twenty). Constants have derivative 0, a parameter 1 in its own slot. A
+// by the rule of each operation in operations.ts. Constants have derivative 0, a parameter 1 in its own slot. A
 // choice takes the branch taken; min, max and abs the side taken; floor, ceil and round give 0. The nodes hold all that
-// this needs, so nothing but one table of rules beside operations.ts is to be written.
+// this needs: what is to be written is one table of rules beside operations.ts.
 
 interface CheckedBase extends Span {
   readonly dimension: Dimension;

@@ -92,7 +92,9 @@ function parseSigned(cursor: Cursor): Ast {
   if (!isSymbol(sign, '-') && !isSymbol(sign, '+')) return parsePower(cursor);
   cursor.at++;
   const operand = nested(cursor, sign, parseSigned);
-  return sign.text === '+' ? operand : { kind: 'negate', operand, start: sign.start, end: operand.end };
+  return sign.text === '+'
+    ? { ...operand, start: sign.start }
+    : { kind: 'negate', operand, start: sign.start, end: operand.end };
 }
 
 function parsePower(cursor: Cursor): Ast {
@@ -116,8 +118,8 @@ function parseValue(cursor: Cursor): Ast {
   if (!isSymbol(token, '(')) throw valueExpected(cursor);
   cursor.at++;
   const inner = nested(cursor, token, parseComparison);
-  closeParenthesis(cursor, token);
-  return inner;
+  const end = closeParenthesis(cursor, token);
+  return inner.kind === 'name' ? inner : { ...inner, start: token.start, end };
 }
 
 function parseName(cursor: Cursor): Ast {

@@ -34,3 +34,23 @@ function exponentMark(text: string): number {
   const lower = text.indexOf('e');
   return lower < 0 ? text.indexOf('E') : lower;
 }
+
+/**
+ * The shortest decimal that reads back as `value`, its point moved: `shiftedText(0.0012, 3)` is "1.2". Large and small
+ * ones have an exponent, as JavaScript writes them.
+ */
+export function shiftedText(value: number, exponent: number): string {
+  const { mantissa, exponent: written } = decimalParts(String(Math.abs(value)));
+  const digits = String(mantissa).replace(/0+$/, '');
+  if (digits === '') return '0';
+  const sign = value < 0 ? '-' : '';
+  /** Where the point stands, counted from the first digit. */
+  const point = String(mantissa).length + written + exponent;
+  if (point > 21 || point < -5) {
+    const rest = digits.slice(1);
+    return `${sign}${digits[0]}${rest === '' ? '' : `.${rest}`}e${point - 1}`;
+  }
+  if (point <= 0) return `${sign}0.${'0'.repeat(-point)}${digits}`;
+  if (point >= digits.length) return sign + digits.padEnd(point, '0');
+  return `${sign}${digits.slice(0, point)}.${digits.slice(point)}`;
+}

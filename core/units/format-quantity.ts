@@ -1,4 +1,5 @@
 import { fromSi } from './convert.ts';
+import { shiftedText } from './decimal-text.ts';
 import type { Unit } from './unit.ts';
 
 /** Doubles carry 15 decimal digits for certain; more would show the conversion's own rounding. */
@@ -11,9 +12,11 @@ const CERTAIN_DIGITS = 15;
  * @param value in SI
  */
 export function formatQuantity(value: number, unit: Unit): string {
-  const inUnit = fromSi(value, unit);
-  const number = unit.decimalExponent === undefined ? Number(inUnit.toPrecision(CERTAIN_DIGITS)) : inUnit;
-  return withUnit(String(number), unit);
+  const number =
+    unit.decimalExponent === undefined || !Number.isFinite(value)
+      ? String(Number(fromSi(value, unit).toPrecision(CERTAIN_DIGITS)))
+      : shiftedText(value, -unit.decimalExponent);
+  return withUnit(number, unit);
 }
 
 /** A number's text followed by a unit: "5 mm", "5 /s", "5". */
