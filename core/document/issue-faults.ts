@@ -26,6 +26,8 @@ export class IssueFaults {
   readonly #schema: z.ZodType;
   readonly #root: YamlValue;
   readonly #places: Places;
+  /** By mapping, the known keys that its mistyped ones probably stand for. */
+  readonly meant = new Map<object, Set<string>>();
 
   constructor(schema: z.ZodType, root: YamlValue, places: Places) {
     this.#schema = schema;
@@ -68,6 +70,7 @@ export class IssueFaults {
       ? `unknown solid '${shorten(key)}'`
       : `unknown key '${shorten(key)}' in ${nounOf(path)}`;
     const nearest = nearestName(key, known) ?? synonymOf(key, known);
+    if (nearest !== undefined) this.#remember(path, nearest);
     return {
       code: isSolid ? 'MODEL_UNKNOWN_CHOICE' : 'MODEL_UNKNOWN_KEY',
       message: nearest === undefined ? what : `${what}; did you mean '${nearest}'?`,
@@ -77,6 +80,20 @@ export class IssueFaults {
           ? `known here: ${known.join(', ')}`
           : undefined,
     };
+  }
+
+  #remember(path: PathStep[], key: string): void {
+    const owner = valueAt(this.#root, path) as object;
+    this.meant.set(owner, (this.meant.get(owner) ?? new Set()).add(key));
+  }
+
+  /** Whether a fault calls a key missing that a mistyped one stands for. */
+  isExplained(issue: Issue): boolean {
+    const path = issue.path as PathStep[];
+    const owner = valueAt(this.#root, path.slice(0, -1));
+    const key = path.at(-1);
+    if (typeof owner !== 'object' || typeof key !== 'string' || key in owner) return false;
+    return this.meant.get(owner)?.has(key) === true;
   }
 
   #knownKeys(path: PathStep[]): string[] {

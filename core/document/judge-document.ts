@@ -1,6 +1,5 @@
 import type { YamlMapping } from '../yaml/value.ts';
 import { entriesOf, isMapping, type Judge } from './judge.ts';
-import { judgeGrowth } from './judge-growth.ts';
 import { judgeLimits } from './judge-limits.ts';
 import { judgeParts } from './judge-parts.ts';
 import { judgePlacing } from './judge-placing.ts';
@@ -15,7 +14,6 @@ export function judgeDocument(judge: Judge, root: YamlMapping): void {
   for (const [, parameter] of entriesOf(root.parameters)) judgeUncertain(judge, parameter, 'a parameter');
   for (const [, material] of entriesOf(root.materials)) judgeMaterial(judge, material);
   for (const [, frame] of entriesOf(root.frames)) if (isMapping(frame)) judgePlacing(judge, frame);
-  judgeGrowth(judge, root.growth);
   judgeParts(judge, root.parts);
   judgeLimits(judge, root.limits);
   judgeSweeps(judge, root.sweeps);

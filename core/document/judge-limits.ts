@@ -3,7 +3,7 @@ import { blameValue, isMapping, itemsOf, type Judge } from './judge.ts';
 import { judgeNamesDiffer } from './judge-name.ts';
 import { shorten } from './words.ts';
 
-/** Judges the limits: names that differ, a bound each, real dates. */
+/** Judges the limits: names that differ, real dates. */
 export function judgeLimits(judge: Judge, limits: YamlValue | undefined): void {
   const list = itemsOf(limits);
   judgeNamesDiffer(judge, list, 'limits');
@@ -11,9 +11,6 @@ export function judgeLimits(judge: Judge, limits: YamlValue | undefined): void {
 }
 
 function judgeLimit(judge: Judge, limit: YamlMapping): void {
-  if (!('min' in limit) && !('max' in limit)) {
-    blameValue(judge, { code: 'MODEL_MISSING_KEY', message: "a limit needs 'min' or 'max'" }, limit);
-  }
   const { waiver } = limit;
   if (!isMapping(waiver) || typeof waiver.until !== 'string' || isDay(waiver.until)) return;
   const message = `'until' is '${shorten(waiver.until)}'; expected a day of the calendar as YYYY-MM-DD`;

@@ -1,11 +1,10 @@
 import type { YamlMapping, YamlValue } from '../yaml/value.ts';
-import { blameKey, blameValue, clash, isMapping, itemsOf, type Judge } from './judge.ts';
+import { blameKey, blameValue, clash, isMapping, isMeant, itemsOf, type Judge } from './judge.ts';
 import { judgeBody } from './judge-body.ts';
 import { judgeName, judgeNamesDiffer } from './judge-name.ts';
 import { judgePlacing, judgeRepeat } from './judge-placing.ts';
-import { judgeSolid, needsMass } from './judge-solid.ts';
+import { judgeSolid } from './judge-solid.ts';
 import { judgeUncertain } from './judge-uncertainty.ts';
-import type { SolidName } from './solid-keys.ts';
 
 const WHAT = ['solid', 'body', 'include'] as const;
 const OF_A_SOLID = ['mass', 'material', 'density', 'cut'] as const;
@@ -32,9 +31,9 @@ function judgePart(judge: Judge, part: YamlMapping): void {
   if (what !== 'solid') refuse(judge, part, OF_A_SOLID, 'solid', HINTS[what ?? 'group']);
   if (!('include' in part)) refuse(judge, part, OF_AN_INCLUDE, 'include');
   if ('anchor' in part && what !== 'solid' && what !== 'body') refuse(judge, part, ['anchor'], 'solid');
-  const solid = judgeSolid(judge, part.solid);
+  judgeSolid(judge, part.solid);
   if (part.cut === 'true') refuseInCut(judge, part);
-  judgeMass(judge, part, solid);
+  judgeMass(judge, part);
   judgeBody(judge, part.body);
   judgePlacing(judge, part);
   judgeRepeat(judge, part.repeat);
@@ -49,7 +48,7 @@ const HINTS = {
 };
 
 function judgeGroup(judge: Judge, part: YamlMapping): void {
-  if ('parts' in part) return;
+  if ('parts' in part || isMeant(judge, part, [...WHAT, 'parts'])) return;
   blameValue(
     judge,
     {
@@ -67,7 +66,12 @@ function refuse(judge: Judge, part: YamlMapping, keys: readonly string[], only: 
     const message = `'${key}' goes with '${only}', which this part has not`;
     blameKey(
       judge,
-      { code: 'MODEL_KEYS_CLASH', message, hint: hint ?? `add '${only}' or delete '${key}'` },
+      {
+        code:
+          only === 'solid' && key !== 'cut' && key !== 'anchor' ? 'MODEL_MASS_MISPLACED' : 'MODEL_KEYS_CLASH',
+        message,
+        hint: hint ?? `add '${only}' or delete '${key}'`,
+      },
       part,
       key,
     );
@@ -87,22 +91,8 @@ function refuseInCut(judge: Judge, part: YamlMapping): void {
   }
 }
 
-function judgeMass(judge: Judge, part: YamlMapping, solid: SolidName | 'particle' | undefined): void {
+function judgeMass(judge: Judge, part: YamlMapping): void {
   judgeUncertain(judge, part.mass, "'mass'");
   judgeUncertain(judge, part.density, "'density'");
   if ('material' in part && 'density' in part) clash(judge, part, 'material', 'density', 'a part');
-  if (solid === undefined || 'mass' in part) return;
-  const hasDensity = 'material' in part || 'density' in part;
-  if (needsMass(solid)) {
-    const message = `solid '${solid}' has no volume, so its part needs 'mass'`;
-    blameKey(judge, { code: 'MODEL_MISSING_KEY', message, hint: "add 'mass'" }, part, 'solid');
-  } else if (!hasDensity && part.cut !== 'true') {
-    const message = "a part with a solid needs 'mass', 'material' or 'density'";
-    blameKey(
-      judge,
-      { code: 'MODEL_MISSING_KEY', message, hint: 'only a cut inherits the material of its host' },
-      part,
-      'solid',
-    );
-  }
 }

@@ -1,28 +1,13 @@
 import type { YamlMapping, YamlValue } from '../yaml/value.ts';
-import { blameKey, blameValue, isMapping, type Judge, needOne } from './judge.ts';
-import { SOLIDS, type SolidKeys, type SolidName, writtenKey } from './solid-keys.ts';
+import { blameKey, blameValue, isMapping, type Judge } from './judge.ts';
+import { judgeUncertain } from './judge-uncertainty.ts';
 
-/**
- * Judges a part's solid: one name, and of each group of keys exactly one.
- *
- * @returns the solid's name, if it has one
- */
-export function judgeSolid(judge: Judge, solid: YamlValue | undefined): SolidName | 'particle' | undefined {
-  if (!isMapping(solid)) return solid === 'particle' ? solid : undefined;
+/** Judges that a part's solid has one name. Which keys that solid needs is judged where solids are made. */
+export function judgeSolid(judge: Judge, solid: YamlValue | undefined): void {
+  if (!isMapping(solid)) return;
   const names = Object.keys(solid);
-  if (names.length !== 1) {
-    blameSolidCount(judge, solid, names);
-    return undefined;
-  }
-  const name = names[0]!;
-  if (!Object.hasOwn(SOLIDS, name)) return undefined;
-  judgeKeys(judge, solid[name]!, name as SolidName);
-  return name as SolidName;
-}
-
-/** Whether a solid has no volume that a density could fill. */
-export function needsMass(name: SolidName | 'particle'): boolean {
-  return name === 'particle' || (SOLIDS[name] as SolidKeys).needsMass === true;
+  if (names.length !== 1) blameSolidCount(judge, solid, names);
+  else judgeKeys(judge, names[0]!, solid[names[0]!]!);
 }
 
 function blameSolidCount(judge: Judge, solid: YamlMapping, names: readonly string[]): void {
@@ -43,28 +28,16 @@ function blameSolidCount(judge: Judge, solid: YamlMapping, names: readonly strin
   }
 }
 
-function judgeKeys(judge: Judge, keys: YamlValue, name: SolidName): void {
-  if (!isMapping(keys)) return;
-  for (const group of (SOLIDS[name] as SolidKeys).needs)
-    needOne(judge, keys, group.map(writtenKey), `solid '${name}'`);
-  if (name === 'mesh') judgeMesh(judge, keys);
+/** What `checkNames` of the solids cannot know of a mesh. */
+function judgeMesh(judge: Judge, keys: YamlMapping): void {
+  if (keys.fill === 'shell' || !('thickness' in keys)) return;
+  const message = "a mesh has 'thickness' only with 'fill: shell'";
+  const hint = "add 'fill: shell' or delete 'thickness'";
+  blameKey(judge, { code: 'MODEL_KEYS_CLASH', message, hint }, keys, 'thickness');
 }
 
-function judgeMesh(judge: Judge, keys: YamlMapping): void {
-  if (keys.fill === 'shell' && !('thickness' in keys)) {
-    blameKey(
-      judge,
-      { code: 'MODEL_MISSING_KEY', message: "a mesh filled as a shell needs 'thickness'" },
-      keys,
-      'fill',
-    );
-  }
-  if (keys.fill !== 'shell' && 'thickness' in keys) {
-    const words = {
-      code: 'MODEL_KEYS_CLASH',
-      message: "a mesh has 'thickness' only with 'fill: shell'",
-      hint: "add 'fill: shell' or delete 'thickness'",
-    };
-    blameKey(judge, words, keys, 'thickness');
-  }
+function judgeKeys(judge: Judge, name: string, keys: YamlValue): void {
+  if (!isMapping(keys)) return;
+  if (name === 'mesh') judgeMesh(judge, keys);
+  for (const key in keys) judgeUncertain(judge, keys[key], `'${key}'`);
 }

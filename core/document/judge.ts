@@ -1,11 +1,14 @@
 import type { Fault } from '../errors.ts';
 import type { Places } from '../yaml/places.ts';
 import type { PathStep, YamlMapping, YamlValue } from '../yaml/value.ts';
+import { oneOf } from './schema-walk.ts';
 
 /** Where a judge says what it finds. Values are named by the mapping that holds them and a path from there. */
 export interface Judge {
   places: Places;
   faults: Fault[];
+  /** Keys that mistyped ones of a mapping probably stand for; those are not called missing as well. */
+  meant?: ReadonlyMap<object, ReadonlySet<string>>;
 }
 
 /** A fault's code, message and hint. */
@@ -23,6 +26,12 @@ export function blameValue(judge: Judge, words: Words, owner: object, ...path: P
 
 export function isMapping(value: YamlValue | undefined): value is YamlMapping {
   return typeof value === 'object' && !Array.isArray(value);
+}
+
+/** Whether a mistyped key of a mapping probably stands for one of these. */
+export function isMeant(judge: Judge, owner: object, keys: readonly string[]): boolean {
+  const meant = judge.meant?.get(owner);
+  return meant !== undefined && keys.some((key) => meant.has(key));
 }
 
 /** The entries of a value that should be a mapping; none when it is not, which the schema reports. */
@@ -50,9 +59,8 @@ export function needOne(
   const given = keys.filter((key) => key in owner);
   if (given.length === 1) return given[0];
   if (given.length > 1) clash(judge, owner, given[0]!, given[1]!, noun);
-  else {
-    const words = keys.map((key) => `'${key}'`);
-    const list = words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} or ${words.at(-1)}`;
+  else if (!isMeant(judge, owner, keys)) {
+    const list = oneOf(keys.map((key) => `'${key}'`));
     blameValue(judge, { code: 'MODEL_MISSING_KEY', message: `${noun} needs ${list}`, hint }, owner);
   }
   return undefined;

@@ -27,7 +27,7 @@ const ISSUES_AT_MOST = 200;
  * @returns the document: the very objects whose lines `places` knows
  * @throws InputError with every fault found, in the order of the text: those of `readYaml`, or MODEL_UNKNOWN_KEY,
  * MODEL_MISSING_KEY, MODEL_WRONG_SHAPE, MODEL_UNKNOWN_CHOICE, MODEL_KEYS_CLASH, MODEL_DUPLICATE_NAME,
- * MODEL_BAD_NAME, MODEL_BAD_DATE, MODEL_MIXED_GROWTH, YAML_UNQUOTED_COMMA
+ * MODEL_BAD_NAME, MODEL_BAD_DATE, MODEL_MASS_MISPLACED, YAML_UNQUOTED_COMMA
  */
 export function readDocument(text: string, file: string): DocumentRead {
   const { root, places } = readYaml(text, file);
@@ -46,24 +46,25 @@ function faultsOf(root: YamlMapping, places: Places, text: string): Fault[] {
   isAssembly ??= quickCheck(assembly);
   const faults: Fault[] = [];
   const strange = text.includes('__proto__') || text.includes('\\') ? prototypeKeyFaults(root, places) : [];
-  const torn = text.includes('(') ? findTornIfAny(root) : [];
-  if (!isAssembly(root)) faults.push(...schemaFaults(root, places, torn));
-  judgeDocument({ places, faults }, root);
+  const torn = text.includes('(') ? findTorn(root) : [];
+  const reader = isAssembly(root) ? undefined : new IssueFaults(assembly, root, places);
+  if (reader !== undefined) faults.push(...schemaFaults(root, reader, torn));
+  judgeDocument({ places, faults, meant: reader?.meant }, root);
   faults.push(...strange, ...torn.slice(0, ISSUES_AT_MOST).map((one) => tornFault(one, places)));
   return faults;
 }
 
-function findTornIfAny(root: YamlMapping): TornExpression[] {
-  return findTorn(root);
-}
-
-function schemaFaults(root: YamlMapping, places: Places, torn: readonly TornExpression[]): Fault[] {
-  const issues = assembly.safeParse(root).error?.issues ?? [];
-  const reader = new IssueFaults(assembly, root, places);
-  return issues.slice(0, ISSUES_AT_MOST).flatMap((issue) => {
-    const left = withoutTorn(issue, torn);
-    return left === undefined ? [] : reader.faultsOf(left);
-  });
+function schemaFaults(root: YamlMapping, reader: IssueFaults, torn: readonly TornExpression[]): Fault[] {
+  const issues = (assembly.safeParse(root).error?.issues ?? [])
+    .slice(0, ISSUES_AT_MOST)
+    .map((issue) => withoutTorn(issue, torn))
+    .filter((issue) => issue !== undefined);
+  const unknown = issues.filter((issue) => issue.code === 'unrecognized_keys');
+  const others = issues.filter((issue) => issue.code !== 'unrecognized_keys');
+  const faults = unknown.flatMap((issue) => reader.faultsOf(issue));
+  return faults.concat(
+    others.filter((issue) => !reader.isExplained(issue)).flatMap((issue) => reader.faultsOf(issue)),
+  );
 }
 
 type Issue = Parameters<IssueFaults['faultsOf']>[0];

@@ -71,7 +71,7 @@ export const inertia = z.strictObject({
 export const body = z.strictObject({
   mass: uncertainQuantity.describe('mass'),
   centre: uncertainTriple.optional().describe("centre of mass in the part's axes; the origin where left out"),
-  inertia: inertia.optional().describe('inertia tensor; a point mass where left out'),
+  inertia: inertia.describe('inertia tensor'),
 });
 
 /** A weighed mass that replaces the sum. */

@@ -24,7 +24,10 @@ export const uncertainQuantity = z.union([
   z.strictObject({ value: quantity.describe('the quantity'), ...uncertainty }),
 ]);
 
-/** Three places, each plain or with its uncertainty. */
+/** Two lengths, each plain or with its uncertainty. */
+export const uncertainPair = z.tuple([uncertainQuantity, uncertainQuantity]);
+
+/** Three lengths, each plain or with its uncertainty. */
 export const uncertainTriple = z.tuple([uncertainQuantity, uncertainQuantity, uncertainQuantity]);
 
 /** A parameter: a quantity, or one with bounds and uncertainty. */
@@ -52,7 +55,6 @@ export const PLANES = ['xy', 'xz', 'yz'] as const;
 export const AXES = ['x', 'y', 'z'] as const;
 export const BASES = ['estimated', 'calculated', 'measured'] as const;
 export const PRODUCT_SIGNS = ['negative', 'positive'] as const;
-export const LENGTH_UNITS = ['m', 'km', 'cm', 'mm', 'um', 'in', 'ft'] as const;
 
 export const plane = z.enum(PLANES);
 export const axis = z.enum(AXES);

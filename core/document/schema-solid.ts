@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { LENGTH_UNITS, pair, quantity, text, triple } from './schema-quantity.ts';
+import { pair, text, triple, uncertainPair, uncertainQuantity, uncertainTriple } from './schema-quantity.ts';
 import {
   type KeyShape,
   SOLID_KEY_SHAPES,
@@ -11,18 +11,19 @@ import {
   writtenKey,
 } from './solid-keys.ts';
 
+type UncertainQuantity = z.infer<typeof uncertainQuantity>;
 type Pair = [string, string];
 type Triple = [string, string, string];
 
 interface ShapeTypes {
   text: string;
-  pair: Pair;
-  triple: Triple;
+  quantity: UncertainQuantity;
+  pair: [UncertainQuantity, UncertainQuantity];
+  triple: [UncertainQuantity, UncertainQuantity, UncertainQuantity];
   pairs: Pair[];
   triples: Triple[];
   outlines: Pair[][];
   faces: string[][];
-  unit: (typeof LENGTH_UNITS)[number];
   fill: 'solid' | 'shell';
 }
 
@@ -43,14 +44,14 @@ export type SolidDocument = 'particle' | { [N in SolidName]?: SolidKeysDocument<
 const polygon = z.array(pair).min(3);
 
 const SHAPES: Record<KeyShape, z.ZodType> = {
-  text: quantity,
-  pair,
-  triple,
+  text,
+  quantity: uncertainQuantity,
+  pair: uncertainPair,
+  triple: uncertainTriple,
   pairs: polygon,
   triples: z.array(triple).min(3),
   outlines: z.array(polygon),
   faces: z.array(z.array(text).min(3)).min(4),
-  unit: z.enum(LENGTH_UNITS),
   fill: z.enum(['solid', 'shell']),
 };
 

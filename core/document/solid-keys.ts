@@ -1,30 +1,30 @@
-/** How a key of a solid is written: text, two or three texts in a list, lists of those, or one of a few words. */
+/** How a key of a solid is written: text, a quantity, two or three quantities in a list, lists of corners, or one of a few words. */
 export type KeyShape =
   | 'text'
+  | 'quantity'
   | 'pair'
   | 'triple'
   | 'pairs'
   | 'triples'
   | 'outlines'
   | 'faces'
-  | 'unit'
   | 'fill';
 
 /** Every key a solid may have, how it is written and what it says. */
 export const SOLID_KEY_SHAPES = {
-  diameter: ['text', 'the full diameter'],
-  radius: ['text', 'half of the diameter; write one of the two'],
-  top_diameter: ['text', 'the full diameter at the top'],
-  top_radius: ['text', 'half of the top diameter; write one of the two'],
-  bore: ['text', 'the inner diameter'],
-  bore_radius: ['text', 'half of the bore; write one of the two'],
-  section: ['text', "the diameter of the ring's tube"],
-  section_radius: ['text', 'half of the section; write one of the two'],
-  wall: ['text', 'the thickness of the wall, inwards from the diameter'],
-  length: ['text', 'the full length along z'],
-  height: ['text', 'the height from the base along z'],
-  angle: ['text', 'how far it turns about z; 360 deg where left out'],
-  thickness: ['text', 'the thickness of a thin solid or of the skin of a mesh'],
+  diameter: ['quantity', 'the full diameter'],
+  radius: ['quantity', 'half of the diameter; write one of the two'],
+  top_diameter: ['quantity', 'the full diameter at the top'],
+  top_radius: ['quantity', 'half of the top diameter; write one of the two'],
+  bore: ['quantity', 'the inner diameter'],
+  bore_radius: ['quantity', 'half of the bore; write one of the two'],
+  section: ['quantity', "the diameter of the ring's tube"],
+  section_radius: ['quantity', 'half of the section; write one of the two'],
+  wall: ['quantity', 'the thickness of the wall, inwards from the diameter'],
+  length: ['quantity', 'the full length along z'],
+  height: ['quantity', 'the height from the base along z'],
+  angle: ['quantity', 'how far it turns about z; 360 deg where left out'],
+  thickness: ['quantity', 'the thickness of a thin solid or of the skin of a mesh'],
   box_size: ['triple', 'the full sizes along x, y and z'],
   flat_size: ['pair', 'the full sizes along x and y'],
   base: ['pair', 'the full sizes of the base along x and y'],
@@ -34,7 +34,7 @@ export const SOLID_KEY_SHAPES = {
   vertices: ['triples', 'corners [x, y, z]'],
   faces: ['faces', 'corner numbers from 0, outward by the right-hand rule'],
   file: ['text', 'an STL or OBJ file, relative to this file'],
-  unit: ['unit', 'the unit of the numbers in the mesh file'],
+  unit: ['text', 'the unit of the numbers in the mesh file, such as mm'],
   fill: ['fill', 'solid, or shell with a thickness'],
   weld: ['text', 'how corners are joined; exact where left out'],
 } as const satisfies Record<string, readonly [KeyShape, string]>;
@@ -46,12 +46,10 @@ export type SolidKey = keyof typeof SOLID_KEY_SHAPES;
 export interface SolidKeys {
   /** What it is and where its own origin lies. */
   about: string;
-  /** One key of each group is needed, and only one. */
+  /** One key of each group is needed, and only one; judged where solids are made. */
   needs: readonly (readonly SolidKey[])[];
   /** Keys that may be left out. */
   may?: readonly SolidKey[];
-  /** Whether the mass cannot follow from a density. */
-  needsMass?: boolean;
 }
 
 const DIAMETER = ['diameter', 'radius'] as const;
@@ -61,7 +59,7 @@ const WALL = ['wall', 'bore', 'bore_radius'] as const;
 
 /** Every solid that is a mapping of keys; `solid: particle` has none. */
 export const SOLIDS = {
-  rod: { about: 'slender, along z; origin at the centre', needs: [['length']], needsMass: true },
+  rod: { about: 'slender, along z; origin at the centre', needs: [['length']] },
   box: { about: 'origin at the centre', needs: [['box_size']] },
   cylinder: { about: 'about z; origin at the centre', needs: [DIAMETER, ['length']] },
   tube: { about: 'about z; origin at the centre', needs: [DIAMETER, WALL, ['length']] },
@@ -97,7 +95,7 @@ export const SOLIDS = {
     needs: [['file'], ['unit']],
     may: ['fill', 'thickness', 'weld'],
   },
-  ring: { about: 'thin circle about z; origin at the centre', needs: [DIAMETER], needsMass: true },
+  ring: { about: 'thin circle about z; origin at the centre', needs: [DIAMETER] },
   disk: { about: 'thin; origin at the centre', needs: [DIAMETER], may: ['thickness'] },
   plate: { about: 'thin rectangle; origin at the centre', needs: [['flat_size']], may: ['thickness'] },
   triangle_plate: { about: 'thin triangle of three corners', needs: [['vertices']], may: ['thickness'] },

@@ -1,6 +1,7 @@
 import { type Event, parseEvents, YAMLException } from 'js-yaml';
 import { InputError } from '../errors.ts';
 import { LineTable } from './line-table.ts';
+import { openingOf } from './opening.ts';
 import { plainWords } from './syntax-words.ts';
 
 /** The deepest nesting that is read. */
@@ -58,7 +59,8 @@ export function tooManyNodes(file: string): InputError {
 }
 
 function syntaxError(error: YAMLException, text: string, file: string): InputError {
-  const offset = Math.min(error.mark?.position ?? 0, text.length);
+  const noticed = Math.min(error.mark?.position ?? 0, text.length);
+  const offset = openingOf(error.reason, text, noticed) ?? noticed;
   const at = { file, ...new LineTable(text).placeOf(offset) };
-  return new InputError([{ ...plainWords(error.reason), at }]);
+  return new InputError([{ ...plainWords(error.reason, text[offset]), at }]);
 }

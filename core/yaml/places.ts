@@ -47,7 +47,7 @@ export class Places {
   }
 
   /** The line of a list or mapping of the data, by identity; 1 for an object that is not of this file. */
-  lineOfObject(object: object): number {
+  lineOf(object: object): number {
     return this.#lineTable.lineOf(this.#startOf(object));
   }
 
@@ -78,8 +78,8 @@ export class Places {
   }
 
   /** The place of a piece of a scalar's text, by its offset there. */
-  placeInScalar(path: Steps, offset: number, from?: object): Place {
-    return this.markInScalar(path, offset, 1, from).at;
+  placeInScalar(path: Steps, offset: number, length = 1, from?: object): Place {
+    return this.markInScalar(path, offset, length, from).at;
   }
 
   /**

@@ -102,11 +102,20 @@ class Reader {
         return this.#fault(this.#duplicateKey(event), event);
       case 'unknown-alias':
         return this.#fault(unknownAlias(this.#name(event), this.#anchorsBefore(event)), event);
+      case 'tag':
+        return this.#tag(event);
       case 'alias-circle':
         return this.#fault(aliasCircle(this.#name(event)), event);
       default:
         return this.#fault(COMPLAINTS[complaint.kind], event);
     }
+  }
+
+  #tag(index: number): Fault {
+    const event = this.#events[index];
+    if (event === undefined || !('tagStart' in event)) return this.#fault(TAG_WORDS, index);
+    const at = { file: this.#file, ...this.#lineTable.placeOf(event.tagStart) };
+    return { ...TAG_WORDS, at, length: event.tagEnd - event.tagStart };
   }
 
   #duplicateKey(index: number): Words {
@@ -175,13 +184,16 @@ class Reader {
   }
 
   #place(index: number): { line: number; column: number } {
+    return this.#lineTable.placeOf(spanOf(this.#events, index, this.#text).start);
+  }
+
+  get #lineTable(): LineTable {
     this.#lines ??= new LineTable(this.#text);
-    return this.#lines.placeOf(spanOf(this.#events, index, this.#text).start);
+    return this.#lines;
   }
 }
 
-const COMPLAINTS: Record<'tag' | 'merge-key' | 'key-not-text' | 'control-character', Words> = {
-  tag: TAG_WORDS,
+const COMPLAINTS: Record<'merge-key' | 'key-not-text' | 'control-character', Words> = {
   'merge-key': {
     code: 'YAML_MERGE_KEY',
     message: 'merge keys ("<<") are not used in an assembly file',

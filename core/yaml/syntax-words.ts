@@ -39,21 +39,9 @@ const WORDS: readonly (readonly [reason: string, message: string, hint?: string]
     'quote text that contains brackets, braces or commas',
   ],
   ["expected the node content, but found ','", 'expected a value before the comma'],
-  [
-    'unexpected end of the stream within a flow',
-    'the file ends inside a [ ] or { } that is never closed',
-    'close the bracket',
-  ],
-  [
-    'unexpected end of the stream within a double',
-    'the file ends inside a " quote that is never closed',
-    'close the quote',
-  ],
-  [
-    'unexpected end of the stream within a single',
-    "the file ends inside a ' quote that is never closed",
-    'close the quote',
-  ],
+  ['unexpected end of the stream within a flow', 'this bracket is never closed', 'close the bracket'],
+  ['unexpected end of the stream within a double', 'this quote is never closed', 'close the quote'],
+  ['unexpected end of the stream within a single', 'this quote is never closed', 'close the quote'],
   [
     'unexpected end of the document within a double',
     'the document ends inside a " quote that is never closed',
@@ -110,9 +98,11 @@ export const TAG_WORDS: Words = {
   hint: 'delete the tag; quote text that begins with "!"',
 };
 
-/** Turns the parser's reason into code, message and hint. */
-export function plainWords(reason: string): Words {
+/** Turns the parser's reason, and the character it stopped at, into code, message and hint. */
+export function plainWords(reason: string, character = ' '): Words {
   if (reason.startsWith('nesting exceeded')) return TOO_DEEP_WORDS;
+  if ('[{'.includes(character) && reason.startsWith('deficient')) return OPEN_BRACKET_WORDS;
+  if (character === ':' && reason.startsWith('bad indentation of a mapping')) return SECOND_COLON_WORDS;
   const words = WORDS.find(([begin]) => reason.startsWith(begin));
   if (words !== undefined) return { code: 'YAML_SYNTAX', message: words[1], hint: words[2] };
   if (TAG_REASONS.some((begin) => reason.startsWith(begin))) return TAG_WORDS;
@@ -131,4 +121,16 @@ export const TOO_DEEP_WORDS: Words = {
   code: 'YAML_TOO_DEEP',
   message: 'lists and mappings are nested more than 100 deep',
   hint: 'include a file of its own for the inner assembly',
+};
+
+const SECOND_COLON_WORDS: Words = {
+  code: 'YAML_SYNTAX',
+  message: 'this ":" makes a key where the value above or before it goes on',
+  hint: 'quote text that contains ": ", or line the key up with its neighbours',
+};
+
+const OPEN_BRACKET_WORDS: Words = {
+  code: 'YAML_SYNTAX',
+  message: 'this bracket is not closed before a line that is not indented further than its own',
+  hint: 'close the bracket, or indent the lines inside it',
 };
