@@ -1,5 +1,5 @@
-import { printTensor, scaleFor, TENSOR_ROOM, tensorRows } from '../../core/figures/index.ts';
-import { fromRows, scaleSymmetric } from '../../core/linalg/symmetric3.ts';
+import { inUnit, printTensor, scaleFor, TENSOR_ROOM, tensorRows } from '../../core/figures/index.ts';
+import { fromRows } from '../../core/linalg/symmetric3.ts';
 import type { Rows3 } from '../../core/record/record.ts';
 import type { ReportContext } from './report-context.ts';
 import { padEnd, padStart, textWidth, wrap } from './text-width.ts';
@@ -60,7 +60,7 @@ function tensorBlock(
 ): Block {
   const six = fromRows(tensor.rows);
   const scale = scaleFor(units.inertia, six, TENSOR_ROOM);
-  const printed = printTensor(scaleSymmetric(six, 1 / scale.factor), digits);
+  const printed = printTensor(inUnit(six, scale), digits);
   const rows = tensorRows(printed, products);
   const plain = (text: string) => sheet.plain(text);
   const widths = [0, 1, 2].map((k) => Math.max(...rows.map((row) => textWidth(plain(row[k]!)))));

@@ -14,6 +14,7 @@ import {
   TextError,
   type Unit,
 } from '../units/index.ts';
+import { densityFault } from './density-fault.ts';
 import { FileReader } from './file-reader.ts';
 import type { FileModel, FrameModel, Quantity } from './model.ts';
 import { readGrowth } from './read-growth.ts';
@@ -83,7 +84,7 @@ function readModel(
     assembly: document.assembly,
     places: reader.places,
     units: reader.units,
-    frame: document.frame ?? null,
+    frame: document.frame ? { ...NOT_STATED, ...document.frame } : null,
     parameters: parameters.list,
     slots: parameters.slots,
     frames,
@@ -94,6 +95,8 @@ function readModel(
     sweeps,
   };
 }
+
+const NOT_STATED = { origin: 'not stated', x: 'not stated', y: 'not stated', z: 'not stated' };
 
 const UNIT_KINDS: readonly [keyof FileUnits, Dimension][] = [
   ['length', LENGTH],
@@ -136,21 +139,16 @@ function readUnit(text: string, dimension: Dimension, reader: FileReader, where:
 
 function readMaterials(document: AssemblyDocument, reader: FileReader): Map<string, Quantity> {
   const materials = new Map<string, Quantity>();
+  const unit = reader.unitOf(DENSITY);
   for (const [name, material] of Object.entries(document.materials ?? {})) {
     const where = within(within(null, 'materials'), name);
-    const given =
-      typeof material.density === 'string' && (material.u !== undefined || material.tol !== undefined)
-        ? { value: material.density, u: material.u, tol: material.tol }
-        : material.density;
-    const density =
-      typeof given === 'string' || typeof material.density !== 'string'
-        ? reader.quantity(given, reader.unitOf(DENSITY), within(where, 'density'))
-        : {
-            expression: reader.expression(material.density, reader.unitOf(DENSITY), within(where, 'density')),
-            where: within(where, 'density'),
-            uncertainty: reader.uncertainty(given, reader.unitOf(DENSITY), where),
-          };
-    materials.set(name, density);
+    const density = reader.quantity(material.density, unit, within(where, 'density'));
+    // `u` and `tol` may stand beside the density as well as in it.
+    const uncertainty = density.uncertainty ?? reader.uncertainty(material, unit, where);
+    const { constant } = density.expression;
+    const fault = constant === undefined ? null : densityFault(constant);
+    if (fault) reader.fault(density.where, fault);
+    materials.set(name, { ...density, uncertainty });
   }
   return materials;
 }

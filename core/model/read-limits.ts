@@ -1,5 +1,5 @@
 import type { LimitDocument } from '../document/index.ts';
-import type { Lookup } from '../expressions/index.ts';
+import { type Lookup, lookupIn } from '../expressions/index.ts';
 import { QUANTITIES, type QuantityKind } from '../inertia/quantities.ts';
 import { ANGLE, baseUnitText, type Dimension, INERTIA, LENGTH, MASS, unitFor } from '../units/index.ts';
 import type { FileReader } from './file-reader.ts';
@@ -25,7 +25,7 @@ export function limitLookup(parameters: readonly ParameterModel[]): Lookup {
   for (const prefix of ['', 'basic.', 'predicted.'])
     for (const q of QUANTITIES) slots.set(prefix + q.name, { dimension: DIMENSIONS[q.kind], slot: slot++ });
   for (const p of parameters) slots.set(p.name, { dimension: p.value.expression.dimension, slot: slot++ });
-  return (name) => slots.get(name);
+  return lookupIn(slots);
 }
 
 export interface LimitContext {

@@ -2,6 +2,7 @@ import type { ParameterDocument } from '../document/index.ts';
 import {
   ExpressionError,
   isReservedName,
+  lookupIn,
   orderParameters,
   parseExpression,
   type SymbolInfo,
@@ -28,7 +29,7 @@ export function readParameters(
   const slots = new Map<string, SymbolInfo>();
   const names = Object.keys(document ?? {});
   const root = within(null, 'parameters');
-  reader.lookup = (name) => slots.get(name);
+  reader.lookup = lookupIn(slots);
   const valid = names.filter((name) => checkName(name, reader, within(root, name)));
   const parsed = valid.flatMap((name) => {
     const given = document![name]!;

@@ -1,5 +1,7 @@
-import type { PartDocument, SolidDocument } from '../document/index.ts';
-import { checkNames, type KeyKind, type SolidKind, solidByName } from '../solids/index.ts';
+import type { SolidDocument } from '../document/index.ts';
+import type { KeyKind } from '../solids/dimensions.ts';
+import { solidByName } from '../solids/registry.ts';
+import { checkNames } from '../solids/twins.ts';
 import { ANGLE, LENGTH, PLAIN_UNIT, parseUnit, TextError } from '../units/index.ts';
 import type { FileReader, QuantityDocument } from './file-reader.ts';
 import type { DimensionModel, ShapeModel } from './model.ts';
@@ -40,7 +42,7 @@ export function readSolid(solid: SolidDocument, reader: FileReader, partWhere: W
   }
   return {
     kind: 'solid',
-    solid: kind as SolidKind,
+    solid: kind,
     dimensions,
     thickness:
       thickness === undefined
@@ -94,6 +96,3 @@ function readLengthUnit(text: string, reader: FileReader, where: Where) {
   }
   return reader.unitOf(LENGTH);
 }
-
-/** What a part is made of, apart from its children. */
-export type ShapeSource = Pick<PartDocument, 'solid' | 'body' | 'include'>;

@@ -39,7 +39,7 @@ export function readSweeps(
     });
     return {
       name,
-      vary: Object.entries(sweep.vary).flatMap(([parameter, given]) => {
+      vary: Object.entries(sweep.vary).flatMap(([parameter, given]): SweepModel['vary'] => {
         const at = within(within(where, 'vary'), parameter);
         const symbol = parameters.slots.get(parameter);
         if (!symbol) {

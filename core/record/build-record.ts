@@ -59,7 +59,7 @@ export function buildRecord(roll: RollUp, provenance: Provenance, hash: HashText
     uncertainty: null,
     limits: judgeLimits(roll).map((judged) => limitResult(judged, root)),
     parts: leafBodies.map((b) => partRecord(b, roll.total.predicted)),
-    overrides: overridesOf(roll.members, '', root.path),
+    overrides: overridesOf(roll.members, ''),
     warnings: roll.warnings.map((w) => ({ code: w.code, message: w.message, at: w.at ?? null })),
     parameters,
     inputs,
@@ -198,14 +198,14 @@ function limitResult(judged: JudgedLimit, file: FileModel): LimitResult {
   };
 }
 
-function overridesOf(members: readonly Member[], prefix: string, file: string): OverrideRecord[] {
+function overridesOf(members: readonly Member[], prefix: string): OverrideRecord[] {
   return members.flatMap((member) => {
     // Copies share one override: it is listed once, under the name of the set.
     const one = member.kind === 'copies' ? member.copies[0] : member;
     if (!one) return [];
     const path = prefix + member.name;
     const { part, overridden, scope } = one.node;
-    const inside = overridesOf(one.node.members, `${path}/`, scope.file.path);
+    const inside = overridesOf(one.node.members, `${path}/`);
     if (!overridden || !part.override) return inside;
     const at = scope.file.places.placeOf([...pathOf(part.override.where)]);
     return [

@@ -1,6 +1,6 @@
 import { type Placement, placePoint } from '../inertia/placement.ts';
 import type { Vector3 } from '../linalg/vector3.ts';
-import { type Extent, wireframe } from '../solids/index.ts';
+import type { Extent } from '../solids/dimensions.ts';
 import type { OwnBody } from './own-body.ts';
 import type { Scope } from './scope.ts';
 import type { Member, PartNode } from './tree.ts';
@@ -45,15 +45,7 @@ function boxOf(node: PartNode, placement: Placement): Extent | null {
   if (node.own) boxes.push(node.own.extent);
   if (boxes.length === 0 || boxes.some((b) => b === null)) return null;
   const local = boxes.reduce((a, b) => join(a!, b!))!;
-  const exact = node.members.length === 0 ? wirePoints(node) : null;
-  return boxAround((exact ?? corners(local)).map((p) => placePoint(placement, p)));
-}
-
-/** Points of the solid's outline, closer to its shape than the corners of its box once turned. */
-function wirePoints(node: PartNode): Vector3[] | null {
-  const { shape } = node.part;
-  if (shape.kind !== 'solid' || !node.own?.dimensions) return null;
-  return wireframe(shape.solid.name, node.own.dimensions).flat();
+  return boxAround(corners(local).map((p) => placePoint(placement, p)));
 }
 
 const corners = ({ min, max }: Extent): Vector3[] =>

@@ -1,9 +1,11 @@
 import { InputError } from '../errors.ts';
 import type { Body } from '../inertia/body.ts';
-import { MeshError, meshBody } from '../mesh/index.ts';
+import { meshShell, meshSolid } from '../mesh/mesh-body.ts';
+import { MeshError } from '../mesh/mesh-error.ts';
+import { readMesh } from '../mesh/read-mesh.ts';
 import type { ShapeModel } from '../model/model.ts';
 import { within } from '../model/where.ts';
-import type { Extent } from '../solids/index.ts';
+import type { Extent } from '../solids/dimensions.ts';
 import { evaluate, faultAt, type Scope } from './scope.ts';
 
 /** A mesh file as a part uses it: unit density (or unit mass per area), in metres. */
@@ -24,7 +26,9 @@ export function readMeshPart(shape: ShapeModel & { kind: 'mesh' }, scope: Scope)
     if (known) return known;
     const { bytes, sha256 } = run.source.readBytes(path);
     run.meshInputs.set(path, { sha256, bytes: bytes.length });
-    const reading = meshBody(bytes, { unit: shape.unit, fill: shape.fill, weld });
+    const mesh = readMesh(bytes, { unit: shape.unit.factor, weld });
+    const { body, report, notes } = shape.fill === 'shell' ? meshShell(mesh) : meshSolid(mesh);
+    const reading = { body, extent: report.extent, notes };
     run.meshes.set(key, reading);
     return reading;
   } catch (error) {

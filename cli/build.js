@@ -1,0 +1,44 @@
+// Bundles the command into dist/: one entry and chunks that load only when a command needs them.
+// Run by `npm run build`, by `npm ci` through `prepare`, and by the first `npm start`.
+import { readFileSync, rmSync } from 'node:fs';
+import { dirname, join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+
+const root = join(dirname(fileURLToPath(import.meta.url)), '..');
+
+export async function build() {
+  const { build: bundle } = await import('esbuild');
+  const { version } = JSON.parse(readFileSync(join(root, 'package.json'), 'utf8'));
+  const outdir = join(root, 'dist');
+  rmSync(outdir, { recursive: true, force: true });
+  await bundle({
+    absWorkingDir: root,
+    entryPoints: { steelyard: 'cli/main.ts' },
+    outdir,
+    bundle: true,
+    splitting: true,
+    minify: true,
+    keepNames: true,
+    platform: 'node',
+    format: 'esm',
+    target: 'node20.19',
+    chunkNames: 'chunks/[name]-[hash]',
+    define: { STEELYARD_VERSION: JSON.stringify(version) },
+    banner: {
+      js: "#!/usr/bin/env node\nimport{createRequire as __createRequire}from'node:module';const require=__createRequire(import.meta.url);",
+    },
+    logLevel: 'warning',
+  });
+}
+
+if (process.argv[1] === fileURLToPath(import.meta.url)) {
+  try {
+    await build();
+  } catch (error) {
+    // An installation without development packages has no bundler; the packed product brings dist/ with it.
+    if (error?.code !== 'ERR_MODULE_NOT_FOUND') throw error;
+    console.error(
+      'steelyard: the bundler is not installed, so dist/ was not built; run npm ci with development packages',
+    );
+  }
+}

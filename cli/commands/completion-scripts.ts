@@ -1,0 +1,113 @@
+import type { Command } from 'commander';
+
+export const SHELLS: readonly string[] = ['bash', 'zsh', 'fish'];
+
+interface Known {
+  readonly name: string;
+  readonly about: string;
+  readonly options: readonly { flag: string; about: string; takesValue: boolean }[];
+}
+
+/** A completion script for a shell, made from the commands and options as they are. */
+export function completionScript(shell: string, program: Command): string {
+  const commands = program.commands.map(known);
+  const shared = known(program).options;
+  if (shell === 'fish') return fish(commands, shared);
+  return shell === 'zsh' ? zsh(commands, shared) : bash(commands, shared);
+}
+
+function known(command: Command): Known {
+  return {
+    name: command.name(),
+    about: command.description().split('\n')[0] ?? '',
+    options: command.options.map((o) => ({
+      flag: o.long ?? o.short ?? '',
+      about: o.description,
+      takesValue: o.required || o.optional,
+    })),
+  };
+}
+
+const flagsOf = (command: Known, shared: Known['options']) =>
+  [...command.options, ...shared].map((o) => o.flag).join(' ');
+
+function bash(commands: readonly Known[], shared: Known['options']): string {
+  const cases = commands.map((c) => `    ${c.name}) words="${flagsOf(c, shared)} --help" ;;`).join('\n');
+  return `# bash completion for steelyard
+_steelyard() {
+  local current="\${COMP_WORDS[COMP_CWORD]}" command="\${COMP_WORDS[1]}" words
+  COMPREPLY=()
+  if [ "$COMP_CWORD" -eq 1 ]; then
+    COMPREPLY=( $(compgen -W "${commands.map((c) => c.name).join(' ')} --help --version" -- "$current") )
+    return
+  fi
+  case "$command" in
+${cases}
+    *) words="--help" ;;
+  esac
+  if [[ "$current" == -* ]]; then
+    COMPREPLY=( $(compgen -W "$words" -- "$current") )
+  elif [ "$command" = completion ]; then
+    COMPREPLY=( $(compgen -W "${SHELLS.join(' ')}" -- "$current") )
+  else
+    COMPREPLY=( $(compgen -f -- "$current") )
+  fi
+}
+complete -o filenames -F _steelyard steelyard
+`;
+}
+
+const quoted = (text: string) => text.replace(/'/g, `'\\''`);
+const zshAbout = (text: string) => quoted(text.replace(/[[\]:]/g, '\\$&'));
+
+function zsh(commands: readonly Known[], shared: Known['options']): string {
+  const list = commands.map((c) => `    '${c.name}:${zshAbout(c.about)}'`).join('\n');
+  const cases = commands
+    .map((c) => {
+      const options = [...c.options, ...shared].map(
+        (o) =>
+          `'${o.flag}${o.takesValue ? '=' : ''}[${zshAbout(o.about)}]${o.takesValue ? ':value:_files' : ''}'`,
+      );
+      const rest = c.name === 'completion' ? `'1:shell:(${SHELLS.join(' ')})'` : `'*:file:_files'`;
+      return `    ${c.name}) _arguments ${options.join(' ')} ${rest} ;;`;
+    })
+    .join('\n');
+  return `#compdef steelyard
+# zsh completion for steelyard
+_steelyard() {
+  local -a commands
+  commands=(
+${list}
+  )
+  if (( CURRENT == 2 )); then
+    _describe 'command' commands
+    return
+  fi
+  local command=$words[2]
+  shift words
+  (( CURRENT-- ))
+  case $command in
+${cases}
+  esac
+}
+_steelyard "$@"
+`;
+}
+
+function fish(commands: readonly Known[], shared: Known['options']): string {
+  const names = commands.map((c) => c.name).join(' ');
+  const lines = commands.flatMap((c) => [
+    `complete -c steelyard -n '__fish_use_subcommand' -f -a ${c.name} -d '${quoted(c.about)}'`,
+    ...c.options.map(
+      (o) =>
+        `complete -c steelyard -n '__fish_seen_subcommand_from ${c.name}' -l ${o.flag.replace(/^--/, '')} ${o.takesValue ? '-r ' : ''}-d '${quoted(o.about)}'`,
+    ),
+  ]);
+  const global = shared.map(
+    (o) => `complete -c steelyard -l ${o.flag.replace(/^--/, '')} -d '${quoted(o.about)}'`,
+  );
+  return `# fish completion for steelyard (${names})
+${[...lines, ...global].join('\n')}
+complete -c steelyard -n '__fish_seen_subcommand_from completion' -f -a '${SHELLS.join(' ')}'
+`;
+}

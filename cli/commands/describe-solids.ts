@@ -1,0 +1,100 @@
+import type { SolidKey, SolidKind } from '#core/solids/dimensions.ts';
+import { SOLIDS } from '#core/solids/registry.ts';
+import type { Context } from './context.ts';
+
+/** A mesh is a solid of the format but not of the registry: it needs a file. */
+const MESH = {
+  name: 'mesh',
+  family: 'solid' as const,
+  about: 'a triangle mesh: STL (binary or ASCII) or OBJ',
+  origin: 'its own axes',
+  keys: [
+    ['file', 'path, relative to the assembly file'],
+    ['unit', 'unit of length in which the file was exported; required'],
+    ['fill', 'solid (the default), or shell with a thickness'],
+    ['thickness', 'of a shell'],
+    ['weld', 'corners nearer than this are one; exact where left out'],
+  ] as const,
+};
+
+export const SOLID_HELP_NAMES: readonly string[] = [...SOLIDS.map((s) => s.name), MESH.name];
+
+/** The list of solids, or one of them with its keys. */
+export function describeSolids(name: string | undefined, format: 'table' | 'json', context: Context): string {
+  const all = [...SOLIDS.map(describe), describeMesh()];
+  const chosen = name === undefined ? all : all.filter((s) => s.name === name);
+  if (format === 'json') return `${JSON.stringify(chosen, null, 2)}\n`;
+  return name === undefined ? listText(all, context) : chosen.map(detailText).join('\n');
+}
+
+interface Described {
+  readonly name: string;
+  readonly about: string;
+  readonly origin: string;
+  readonly mass: string;
+  readonly keys: readonly { name: string; about: string; or: readonly string[]; required: boolean }[];
+}
+
+const MASS_FROM: Record<SolidKind['family'], string> = {
+  solid: 'mass, or a density (material)',
+  thin: 'mass, or thickness with a density (material)',
+  line: 'mass',
+};
+
+const describe = (solid: SolidKind): Described => ({
+  name: solid.name,
+  about: solid.about,
+  origin: solid.origin,
+  mass: solid.name === 'ring' ? 'mass' : MASS_FROM[solid.family],
+  keys: solid.keys.map((key: SolidKey) => ({
+    name: key.name,
+    about: key.about,
+    or: (key.twins ?? []).map((twin) => twin.name),
+    required: key.default === undefined,
+  })),
+});
+
+const describeMesh = (): Described => ({
+  name: MESH.name,
+  about: MESH.about,
+  origin: MESH.origin,
+  mass: 'mass, or a density (material)',
+  keys: MESH.keys.map(([name, about]) => ({
+    name,
+    about,
+    or: [],
+    required: name === 'file' || name === 'unit',
+  })),
+});
+
+function listText(all: readonly Described[], context: Context): string {
+  const bar = context.unicode ? '│' : '|';
+  const width = Math.max(...all.map((s) => s.name.length));
+  const lines = all.map((s) => {
+    const keys = s.keys.map((k) => (k.required ? k.name : `[${k.name}]`)).join(' ') || '(none)';
+    return `  ${s.name.padEnd(width)}  ${keys}\n  ${' '.repeat(width)}  origin: ${s.origin}`;
+  });
+  return `Solids. Local axes x, y, z; the axis of anything round is z; lengths are full sizes.
+Each diameter, bore and section has a twin in radius. [optional] in brackets.
+${bar}
+${lines.join('\n')}
+${bar}
+steelyard solids NAME says what each key means.
+`.replaceAll(`${bar}\n`, '\n');
+}
+
+function detailText(s: Described): string {
+  const width = Math.max(4, ...s.keys.map((k) => k.name.length));
+  const keys = s.keys.map((k) => {
+    const or = k.or.length > 0 ? ` (or ${k.or.join(', ')})` : '';
+    return `  ${k.name.padEnd(width)}  ${k.about}${or}${k.required ? '' : '; may be left out'}`;
+  });
+  const inside = s.keys.filter((k) => k.required).map((k) => `${k.name}: …`);
+  const example = s.keys.length === 0 ? `solid: ${s.name}` : `solid: { ${s.name}: { ${inside.join(', ')} } }`;
+  return `${s.name}: ${s.about}
+  origin: ${s.origin}
+  takes:  ${s.mass}
+
+${keys.length > 0 ? `${keys.join('\n')}\n\n` : ''}  ${example}
+`;
+}

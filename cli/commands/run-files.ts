@@ -1,0 +1,148 @@
+import { FAULTS_AT_MOST, type Fault, InputError } from '#core/errors.ts';
+import { displayUnits } from '#core/figures/index.ts';
+import type { RollUpRecord } from '#core/record/record.ts';
+import { type PartSelection, selectPart } from '#core/record/select-part.ts';
+import { TextError } from '#core/units/index.ts';
+import { EXIT } from '../exit-status.ts';
+import { writeWhole } from '../io.ts';
+import { annotationsOfFaults, annotationsOfRecords, formatAnnotations } from '../output/ci-annotations.ts';
+import { isBroken } from '../output/waiver-state.ts';
+import { ciState } from '../project/ci.ts';
+import type { Context } from './context.ts';
+import { dayOf, formatOfFile } from './options.ts';
+import { renderRecords } from './render-records.ts';
+import { type FileRun, rollUpFile } from './roll-up-file.ts';
+import { RUN_FORMATS, type RunOptions } from './run-options.ts';
+
+/** The work of `run` and `check`: roll up, print, and for `check` judge. */
+export async function runFiles(
+  files: readonly string[],
+  options: RunOptions,
+  context: Context,
+  command: 'run' | 'check',
+): Promise<void> {
+  const today = dayOf(options.asOf);
+  // What is wrong with the call is said before anything is computed.
+  const outputs = options.out.map((file) => ({ file, format: formatOfFile(file, options, RUN_FORMATS) }));
+  const runs = await rollUpAll(files, options, context);
+  if (!runs) return;
+  const records = runs.flatMap((run) => run.records);
+  for (const record of records) checkSelection(record, options);
+  const selections = options.of === undefined ? null : selectIn(runs, options.of);
+  const request = { records, selections, options, today };
+  for (const { file, format } of outputs) writeWhole(file, renderRecords(format, request, null));
+  if (outputs.length === 0) {
+    const format = options.format ?? (context.io.outIsTerminal ? 'table' : 'json');
+    context.io.out(renderRecords(format, request, context));
+  }
+  if (options.threeView) await drawThreeViews(runs, options.threeView, context);
+  reportWarnings(records, outputs.length > 0 || !showsWarnings(options, context), context);
+  const broken = records.some((record) => record.limits.some((limit) => isBroken(limit, today)));
+  if (command === 'check') {
+    annotate(annotationsOfRecords(records, today, options.units), context);
+    if (broken) context.status = EXIT.broken;
+  }
+}
+
+/** Rolls every file up; the faults of all are printed together, and then nothing else is. */
+async function rollUpAll(
+  files: readonly string[],
+  options: RunOptions,
+  context: Context,
+): Promise<FileRun[] | null> {
+  const { reportFaults } = await import('../program.ts');
+  const runs: FileRun[] = [];
+  let faults: Fault[] = [];
+  for (const file of files) {
+    try {
+      runs.push(await rollUpFile(file, { states: options.state, set: options.set }, context));
+    } catch (error) {
+      if (!(error instanceof InputError)) throw error;
+      reportFaults(error.faults, context);
+      faults = [...faults, ...error.faults];
+    }
+  }
+  if (faults.length === 0) return runs;
+  if (faults.length >= FAULTS_AT_MOST && !context.quiet)
+    context.io.err(`reading stopped after ${FAULTS_AT_MOST} faults; mend these and run again\n`);
+  annotate(annotationsOfFaults(faults), context);
+  context.status = EXIT.wrong;
+  return null;
+}
+
+/** A frame or a unit that does not exist is the call's fault, not a bug. */
+function checkSelection(record: RollUpRecord, options: RunOptions): void {
+  if (options.frame !== undefined && !Object.hasOwn(record.frames, options.frame))
+    throw new InputError([
+      {
+        code: 'CALL_FRAME',
+        message: `expected a frame of ${record.assembly}, found '${options.frame}'`,
+        hint: `known: ${Object.keys(record.frames).join(', ') || 'none; declare it under `frames:`'}`,
+      },
+    ]);
+  try {
+    displayUnits(record, options.units);
+  } catch (error) {
+    if (!(error instanceof TextError)) throw error;
+    throw new InputError([
+      {
+        code: error.code,
+        message: `--units ${options.units}: ${error.message}`,
+        ...(error.hint ? { hint: error.hint } : {}),
+      },
+    ]);
+  }
+}
+
+function selectIn(runs: readonly FileRun[], path: string): PartSelection[] {
+  return runs.flatMap((run) => run.rolls.map((roll, i) => selectPart(roll, run.records[i]!, path)));
+}
+
+const showsWarnings = (options: RunOptions, context: Context): boolean => {
+  const format = options.format ?? (context.io.outIsTerminal ? 'table' : 'json');
+  return format === 'table' || format === 'markdown';
+};
+
+/** Warnings stand in a table; elsewhere they are said on stderr. */
+function reportWarnings(records: readonly RollUpRecord[], aloud: boolean, context: Context): void {
+  if (!aloud || context.quiet) return;
+  const said = new Set<string>();
+  for (const { warnings } of records)
+    for (const { code, message, at } of warnings) {
+      const line = `warning ${code}: ${message}${at ? ` (${at.file}:${at.line})` : ''}`;
+      if (said.has(line)) continue;
+      said.add(line);
+      context.io.err(`${plainLine(line)}\n`);
+    }
+}
+
+const plainLine = (text: string): string => text.replace(/[\u0000-\u001f\u007f-\u009f]/g, '�');
+
+/** Notes beside the lines of the change, where a CI shows them. */
+function annotate(annotations: Parameters<typeof formatAnnotations>[0], context: Context): void {
+  const ci = ciState(context.io.env);
+  if (ci?.ci.name !== 'GitHub Actions' || annotations.length === 0) return;
+  context.io.err(formatAnnotations(annotations, 'workflow-command'));
+}
+
+async function drawThreeViews(runs: readonly FileRun[], file: string, context: Context): Promise<void> {
+  const { drawRoll } = await import('./draw-roll.ts');
+  const drawings = runs.flatMap((run) => run.rolls.map((roll, i) => ({ roll, record: run.records[i]! })));
+  for (const { roll, record } of drawings) {
+    const path = drawings.length === 1 ? file : withName(file, `${record.assembly}-${record.state}`);
+    writeWhole(path, drawRoll(roll, record));
+    if (!context.quiet) context.io.err(`${path}: three views of ${record.assembly}, ${record.state}\n`);
+  }
+}
+
+/** `out.svg` → `out-heron-flight.svg`, where several drawings are asked for at once. */
+function withName(file: string, name: string): string {
+  const plain = name
+    .toLowerCase()
+    .replace(/[^\p{L}\p{N}]+/gu, '-')
+    .replace(/^-|-$/g, '');
+  const at = file.lastIndexOf('.');
+  return at > file.lastIndexOf('/') + 1
+    ? `${file.slice(0, at)}-${plain}${file.slice(at)}`
+    : `${file}-${plain}.svg`;
+}
