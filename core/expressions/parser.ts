@@ -92,9 +92,8 @@ function parseSigned(cursor: Cursor): Ast {
   if (!isSymbol(sign, '-') && !isSymbol(sign, '+')) return parsePower(cursor);
   cursor.at++;
   const operand = nested(cursor, sign, parseSigned);
-  return sign.text === '+'
-    ? { ...operand, start: sign.start }
-    : { kind: 'negate', operand, start: sign.start, end: operand.end };
+  if (sign.text === '+') return widened(operand, sign.start, operand.end);
+  return { kind: 'negate', operand, start: sign.start, end: operand.end };
 }
 
 function parsePower(cursor: Cursor): Ast {
@@ -119,8 +118,12 @@ function parseValue(cursor: Cursor): Ast {
   cursor.at++;
   const inner = nested(cursor, token, parseComparison);
   const end = closeParenthesis(cursor, token);
-  return inner.kind === 'name' ? inner : { ...inner, start: token.start, end };
+  return widened(inner, token.start, end);
 }
+
+/** A part with the parentheses or the plus that it was written with; the place of a name stays the name's. */
+const widened = (ast: Ast, start: number, end: number): Ast =>
+  ast.kind === 'name' ? ast : { ...ast, start, end };
 
 function parseName(cursor: Cursor): Ast {
   const token = peek(cursor);

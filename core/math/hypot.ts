@@ -14,7 +14,6 @@ export function hypot(x: number, y: number): number {
   const b = Math.abs(y);
   const large = Math.max(a, b);
   const small = Math.min(a, b);
-  if (small === 0) return large;
   if (large === Infinity) return Infinity;
   if (large < LARGEST_SAFE && small > SMALLEST_SAFE) return Math.sqrt(large * large + small * small);
   // Scaling by a power of two is exact; far apart, the smaller one's square is below half a unit of the last place.

@@ -84,7 +84,16 @@ describe('a compiled expression', () => {
   });
 
   it('never gives minus zero', () => {
-    for (const text of ['-0', '-nothing', 'round(-0.2)', 'ceil(-0.2)', '-(1 - 1)', '- 0'])
+    for (const text of [
+      '-0',
+      '-nothing',
+      'round(-0.2)',
+      'ceil(-0.2)',
+      '-(1 - 1)',
+      '- 0',
+      'ceil(nothing - 0.2)',
+      'round(nothing - 0.2)',
+    ])
       expect(Object.is(compile(text).evaluate(VALUES), 0)).toBe(true);
   });
 

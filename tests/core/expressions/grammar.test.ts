@@ -157,6 +157,7 @@ describe('faults of syntax', () => {
     expect(evaluateText(`${'1 + '.repeat(499)}1`)).toBe(500);
     expect(faultAt(`${'1 + '.repeat(500)}1`)[0]).toBe('EXPRESSION_TOO_LONG');
     expect(evaluateText(`${'('.repeat(100)}1${')'.repeat(100)}`)).toBe(1);
+    expect(evaluateText(`${'(1) + -1 + '.repeat(150)}abs(1)`)).toBe(1);
     for (const deep of [
       `${'('.repeat(101)}1${')'.repeat(101)}`,
       `${'-'.repeat(101)}1`,

@@ -4,6 +4,7 @@ import { faultOf, MM } from './small-machine.ts';
 describe('messages', () => {
   it.each([
     ['boom + 3', '"+" needs values of one kind; boom is a length and 3 is a plain number', 'write 3 mm'],
+    ['3 + boom', '"+" needs values of one kind; 3 is a plain number and boom is a length', 'write 3 mm'],
     ['boom + load', '"+" needs values of one kind; boom is a length and load is a mass', undefined],
     [
       'boom + n * 2',

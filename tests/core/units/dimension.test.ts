@@ -29,6 +29,15 @@ describe('a dimension', () => {
     );
   });
 
+  it('is another object when any exponent differs', () => {
+    const places = [-17, -16, -1, 0, 1, 15, 16];
+    const kinds = new Set<unknown>();
+    for (const a of places)
+      for (const b of places)
+        for (const c of places) for (const d of places) kinds.add(dimension(a, b, c, d));
+    expect(kinds.size).toBe(places.length ** 4);
+  });
+
   it('divides back what it multiplied', () => {
     fc.assert(
       fc.property(anyDimension, anyDimension, (a, b) => {

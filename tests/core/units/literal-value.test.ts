@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { shiftedText } from '../../../core/units/decimal-text.ts';
 import { getUnit, literalValue, parseUnit, shiftDecimal, type Unit } from '../../../core/units/index.ts';
 
 const decimal = fc
@@ -114,6 +115,27 @@ describe('a decimal with a unit', () => {
     expect(literalValue('1e99999999999999999999999', getUnit('mm'))).toBe(Infinity);
     expect(literalValue('1e-99999999999999999999999', getUnit('mm'))).toBe(0);
     expect(literalValue('7'.repeat(1900), getUnit('deg'))).toBe(Infinity);
+  });
+});
+
+describe('shiftedText', () => {
+  it('unshifted is the shortest text that the language itself writes', () => {
+    const magnitude = fc.integer({ min: -12, max: 25 });
+    const written = fc
+      .tuple(fc.integer({ min: 1, max: 999_999 }), magnitude)
+      .map(([n, k]) => Number(`${n}e${k}`));
+    fc.assert(
+      fc.property(fc.oneof(written, fc.double({ noNaN: true, noDefaultInfinity: true })), (value) => {
+        expect(shiftedText(value, 0)).toBe(String(value).replace('e+', 'e'));
+      }),
+      { numRuns: 1000 },
+    );
+  });
+
+  it('moves the point and drops the zeros it uncovers', () => {
+    expect(shiftedText(0.0012, 3)).toBe('1.2');
+    expect(shiftedText(1200, -3)).toBe('1.2');
+    expect(shiftedText(-5e-324, 3)).toBe('-5e-321');
   });
 });
 

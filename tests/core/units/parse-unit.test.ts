@@ -49,6 +49,7 @@ describe('parseUnit', () => {
     ['m/1', 'UNITS_SYNTAX'],
     ['2 mm', 'UNITS_SYNTAX'],
     ['m^60*m^60', 'UNITS_SYNTAX'],
+    ['lb^60/kg^60', 'UNITS_SYNTAX'],
     ['furlong', 'UNITS_UNKNOWN_NAME'],
     ['g*mmm', 'UNITS_UNKNOWN_NAME'],
   ])('refuses "%s" with %s', (text, code) => {
