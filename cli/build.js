@@ -18,7 +18,6 @@ export async function build() {
     bundle: true,
     splitting: true,
     minify: true,
-    keepNames: true,
     platform: 'node',
     format: 'esm',
     target: 'node20.19',

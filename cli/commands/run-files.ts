@@ -1,5 +1,5 @@
 import { FAULTS_AT_MOST, type Fault, InputError } from '#core/errors.ts';
-import { displayUnits } from '#core/figures/index.ts';
+import { displayUnits, plainText } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { type PartSelection, selectPart } from '#core/record/select-part.ts';
 import { TextError } from '#core/units/index.ts';
@@ -112,11 +112,9 @@ function reportWarnings(records: readonly RollUpRecord[], aloud: boolean, contex
       const line = `warning ${code}: ${message}${at ? ` (${at.file}:${at.line})` : ''}`;
       if (said.has(line)) continue;
       said.add(line);
-      context.io.err(`${plainLine(line)}\n`);
+      context.io.err(`${plainText(line)}\n`);
     }
 }
-
-const plainLine = (text: string): string => text.replace(/[\u0000-\u001f\u007f-\u009f]/g, '�');
 
 /** Notes beside the lines of the change, where a CI shows them. */
 function annotate(annotations: Parameters<typeof formatAnnotations>[0], context: Context): void {

@@ -19,22 +19,27 @@ export interface GitState {
  */
 export async function gitState(folder: string): Promise<GitState | null> {
   const ask = (...args: string[]) => git(folder, ...args).catch(() => null);
-  const [head, branch, tag, remote, status] = await Promise.all([
-    ask('log', '-1', '--format=%H%n%an <%ae>'),
-    ask('symbolic-ref', '--short', '-q', 'HEAD'),
-    ask('describe', '--tags', '--exact-match', 'HEAD'),
+  // Three processes, not one a question: each costs more than the roll-up of a small assembly.
+  const [status, log, remote] = await Promise.all([
+    ask('status', '--porcelain=v2', '--branch', '--untracked-files=no'),
+    ask('log', '-1', '--format=%an <%ae>%n%D'),
     ask('config', '--get', 'remote.origin.url'),
-    ask('status', '--porcelain', '--untracked-files=no'),
   ]);
-  if (!head) return null;
-  const [commit, author] = head.split('\n');
+  if (!status || !log) return null;
+  const lines = status.split('\n');
+  const header = (name: string) =>
+    lines.find((line) => line.startsWith(`# branch.${name} `))?.slice(`# branch.${name} `.length);
+  const commit = header('oid');
+  const branch = header('head');
+  if (!commit || commit === '(initial)') return null;
+  const [author = '', decoration = ''] = log.split('\n');
   return {
-    commit: commit!,
-    branch,
-    tag,
-    author: author ?? null,
-    remote: remote === null ? null : withoutCredentials(remote),
-    dirty: status !== null && status !== '',
+    commit,
+    branch: branch && branch !== '(detached)' ? branch : null,
+    tag: /(?:^|, )tag: ([^,]+)/.exec(decoration)?.[1] ?? null,
+    author: author || null,
+    remote: remote ? withoutCredentials(remote) : null,
+    dirty: lines.some((line) => line !== '' && !line.startsWith('#')),
   };
 }
 

@@ -1,3 +1,5 @@
+import { existsSync } from 'node:fs';
+import { join } from 'node:path';
 import type { Provenance } from '#core/record/record.ts';
 import { version } from '../version.ts';
 import { ciState } from './ci.ts';
@@ -11,7 +13,7 @@ export async function provenanceOf(
   folder: string,
   env: NodeJS.ProcessEnv = process.env,
 ): Promise<Provenance> {
-  const git = await gitState(folder);
+  const git = existsSync(join(folder, '.git')) ? await gitState(folder) : null;
   const ci = ciState(env);
   const given = {
     commit: env.STEELYARD_COMMIT || git?.commit || ci?.commit,

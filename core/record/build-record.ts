@@ -40,11 +40,10 @@ export function buildRecord(roll: RollUp, provenance: Provenance, hash: HashText
   const { root } = roll.project;
   const inputs = inputsOf(roll);
   const parameters = parametersOf(roll);
-  const leafBodies = roll.leaves.map((leaf) => ({
-    leaf,
-    basic: leafBody(leaf, 'basic'),
-    predicted: leafBody(leaf, 'predicted'),
-  }));
+  const leafBodies = roll.leaves.map((leaf) => {
+    const basic = leafBody(leaf, 'basic');
+    return { leaf, basic, predicted: grows(leaf) ? leafBody(leaf, 'predicted') : basic };
+  });
   return withoutNegativeZero({
     schema: 'steelyard-record/1',
     stamp: stampOf(inputs, root.path, roll.state, parameters, CORE_VERSION, hash),
@@ -66,6 +65,8 @@ export function buildRecord(roll: RollUp, provenance: Provenance, hash: HashText
     provenance,
   });
 }
+
+const grows = ({ node, factor }: Leaf): boolean => node.growth !== 0 || factor.basic !== factor.predicted;
 
 function conventionsOf(file: FileModel): Conventions {
   const { units } = file;
@@ -138,6 +139,7 @@ function partRecord(
   const { part, scope } = node;
   const about = inertiaAboutPoint(predicted, total.centre);
   const whole = inertiaAboutCentre(total);
+  const basicRecord = partBody(basic, leaf.sign);
   const share = (k: 0 | 1 | 2) => (whole[k] === 0 ? 0 : (leaf.sign * about[k]) / whole[k]);
   return {
     path: leaf.path,
@@ -148,14 +150,18 @@ function partRecord(
     maturity: node.maturity,
     category: node.category,
     basis: node.basis,
-    growth: leaf.factor.predicted === leaf.factor.basic ? node.growth : predicted.mass / basic.mass - 1,
-    basic: partBody(basic, leaf.sign),
-    predicted: partBody(predicted, leaf.sign),
+    growth: growthOfLeaf(leaf),
+    basic: basicRecord,
+    predicted: predicted === basic ? basicRecord : partBody(predicted, leaf.sign),
     share: { mass: (leaf.sign * predicted.mass) / total.mass, xx: share(0), yy: share(1), zz: share(2) },
     note: part.note,
     source: part.source,
   };
 }
+
+/** Predicted over basic less one, overrides around it included; from the factors, for a part may weigh nothing. */
+const growthOfLeaf = ({ node, factor }: Leaf): number =>
+  factor.predicted === factor.basic ? node.growth : ((1 + node.growth) * factor.predicted) / factor.basic - 1;
 
 function partBody(body: Body, sign: 1 | -1): PartBody {
   const j = inertiaAboutCentre(body);
