@@ -23,8 +23,11 @@ export type FieldUnit = Unit;
 
 /** Most texts in a large machine: a number, or a number with one unit. They need no tree. */
 const BARE_NUMBER = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
-const NUMBER_AND_UNIT = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?) *([A-Za-z]+)$/;
+const NUMBER_AND_UNIT = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?) *([A-Za-z/][^()]*)$/;
 const LONGEST_SIMPLE = 100;
+
+/** Compound units met after a number, by their text; what follows a number means the same after any other. */
+const unitTexts = new Map<string, Unit>();
 
 /**
  * Reads, checks and compiles an expression. A bare number, or an expression of plain numbers, takes the field's unit;
@@ -40,14 +43,22 @@ export function compileExpression(
   lookup: Lookup,
   units: FileUnits,
 ): Expression {
-  if (text.length <= LONGEST_SIMPLE) {
-    if (BARE_NUMBER.test(text)) return compileNumber(text, field ?? PLAIN_UNIT);
-    const pair = NUMBER_AND_UNIT.exec(text);
-    const unit = pair === null ? undefined : findUnit(pair[2]!);
-    if (unit !== undefined && (field === null || field.dimension === unit.dimension))
-      return compileNumber(pair![1]!, unit);
-  }
-  return compileAst(parseExpression(text), field, lookup, units);
+  if (text.length > LONGEST_SIMPLE) return compileAst(parseExpression(text), field, lookup, units);
+  if (BARE_NUMBER.test(text)) return compileNumber(text, field ?? PLAIN_UNIT);
+  const pair = NUMBER_AND_UNIT.exec(text);
+  if (pair === null) return compileAst(parseExpression(text), field, lookup, units);
+  const [, number, unitText] = pair as unknown as [string, string, string];
+  const unit = findUnit(unitText) ?? unitTexts.get(unitText);
+  if (unit !== undefined && (field === null || field.dimension === unit.dimension))
+    return compileNumber(number, unit);
+  const ast = parseExpression(text);
+  if (ast.kind === 'number' && ast.unit !== undefined) rememberUnit(unitText, ast.unit);
+  return compileAst(ast, field, lookup, units);
+}
+
+function rememberUnit(text: string, unit: Unit): void {
+  if (unitTexts.size >= 1000) unitTexts.clear();
+  unitTexts.set(text, unit);
 }
 
 function compileNumber(text: string, unit: Unit): Expression {

@@ -1,7 +1,15 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { compileExpression } from '../../../core/expressions/index.ts';
-import { DENSITY, getUnit, INERTIA, LENGTH, parseUnit, unitFor } from '../../../core/units/index.ts';
+import {
+  DENSITY,
+  getUnit,
+  INERTIA,
+  LENGTH,
+  literalValue,
+  parseUnit,
+  unitFor,
+} from '../../../core/units/index.ts';
 import { evaluateText, FILE, faultOf, LOOKUP, MM, VALUES } from './small-machine.ts';
 
 describe('a field', () => {
@@ -39,6 +47,21 @@ describe('a field', () => {
         for (const written of [text, `${text} mm`, ` ${text}`, `(${text})`])
           expect(evaluateText(written, MM)).toBe(nearest);
       }),
+    );
+  });
+
+  it('reads a compound unit the same the first time and the next', () => {
+    const field = unitFor(INERTIA, FILE);
+    for (const text of ['7 lb * in^2', '9 lb * in^2', '-7 lb * in^2']) {
+      const expected = literalValue(text.replace('-', '').split(' ')[0]!, parseUnit('lb*in^2'));
+      expect(evaluateText(text, field)).toBe(text.startsWith('-') ? -expected : expected);
+    }
+    expect(evaluateText('6 /mm')).toBe(6000);
+    expect(evaluateText('7 /mm')).toBe(7000);
+    expect(evaluateText('6 mm * 2 + boom')).toBeCloseTo(0.432, 15);
+    expect(evaluateText('8 mm * 2 + boom')).toBeCloseTo(0.436, 15);
+    expect(faultOf('9 lb * in^2', MM).message).toBe(
+      'expected a length, and 9 lb*in^2 is a moment of inertia',
     );
   });
 
