@@ -15,13 +15,18 @@ export interface Placement {
 export const IN_PLACE: Placement = { turn: IDENTITY, offset: [0, 0, 0] };
 
 /** A local point in the parent's axes [m]. */
-export const placePoint = (p: Placement, x: Vector3): Vector3 => add(apply(p.turn, x), p.offset);
+export const placePoint = (p: Placement, x: Vector3): Vector3 =>
+  add(p.turn === IDENTITY ? x : apply(p.turn, x), p.offset);
 
 /** Local axes → parent → grandparent as one placement. */
-export const compose = (outer: Placement, inner: Placement): Placement => ({
-  turn: multiply(outer.turn, inner.turn),
-  offset: placePoint(outer, inner.offset),
-});
+export function compose(outer: Placement, inner: Placement): Placement {
+  if (outer === IN_PLACE) return inner;
+  if (inner === IN_PLACE) return outer;
+  return {
+    turn: outer.turn === IDENTITY ? inner.turn : multiply(outer.turn, inner.turn),
+    offset: placePoint(outer, inner.offset),
+  };
+}
 
 /** A body from local into the parent's axes: Q → R Q Rᵀ, centre → offset + R c. Mirrors included. */
 export function placeBody(p: Placement, body: Body): Body {

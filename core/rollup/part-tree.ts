@@ -1,6 +1,6 @@
 import { type Moments, netBody, netMass } from '../inertia/balance-sum.ts';
 import { scaleBody } from '../inertia/body.ts';
-import { compose as composeCopy, IN_PLACE } from '../inertia/placement.ts';
+import { compose } from '../inertia/placement.ts';
 import { judgeBody } from '../inertia/possibility.ts';
 import type { FileModel, PartModel } from '../model/model.ts';
 import { formatQuantity, MASS, unitFor } from '../units/index.ts';
@@ -59,7 +59,7 @@ function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: 
       kind: 'one' as const,
       name,
       node,
-      placement: copy === IN_PLACE ? placement : composeCopy(copy, placement),
+      placement: compose(copy, placement),
       moments: placeMoments(copy, placed),
     };
   });

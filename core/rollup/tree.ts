@@ -76,7 +76,7 @@ export function* leavesOf(
     }
     const { node } = member;
     const path = prefix + member.name;
-    const here = member.placement === IN_PLACE ? placement : compose(placement, member.placement);
+    const here = compose(placement, member.placement);
     const turned = node.part.cut ? (sign === 1 ? -1 : 1) : sign;
     const scaled = {
       basic: factor.basic * node.factor.basic,
@@ -115,7 +115,7 @@ export function findMember(members: readonly Member[], path: string): Found | nu
     if (!one) return null;
     here = {
       members: one.node.members,
-      placement: one.placement === IN_PLACE ? placement : compose(placement, one.placement),
+      placement: compose(placement, one.placement),
       sign: one.node.part.cut ? (sign === 1 ? -1 : 1) : sign,
       factor: {
         basic: factor.basic * one.node.factor.basic,
