@@ -107,7 +107,7 @@ export function unitHint(name: string): string {
 
 /** The unit probably meant: another spelling of it, or the nearest with the same first letter and about as long. */
 export function nearestUnitName(name: string): string | undefined {
-  const other = OTHER_SPELLINGS.get(name) ?? OTHER_SPELLINGS.get(name.toLowerCase());
+  const other = OTHER_SPELLINGS.get(name.toLowerCase());
   if (other !== undefined) return other;
   const first = name.charAt(0).toLowerCase();
   const difference = (unit: string): number => Math.abs(unit.length - name.length);

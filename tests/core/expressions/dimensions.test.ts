@@ -23,6 +23,7 @@ describe('dimensions', () => {
     ['sqrt(boom * wall)', LENGTH],
     ['(boom^3)^(1/3)', LENGTH],
     ['(boom * wall)^0.5', LENGTH],
+    ['(boom^49)^(1/49)', LENGTH],
     ['boom^(4 - 2)', dimension(2, 0, 0, 0)],
     ['sweep / 1 rad', PLAIN],
     ['atan2(boom, wall)', ANGLE],

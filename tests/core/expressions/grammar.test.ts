@@ -110,6 +110,22 @@ describe('functions', () => {
   });
 });
 
+describe('comparisons', () => {
+  it.each([
+    ['<', 'yes', 'no', 'no'],
+    ['<=', 'yes', 'yes', 'no'],
+    ['>', 'no', 'no', 'yes'],
+    ['>=', 'no', 'yes', 'yes'],
+    ['==', 'no', 'yes', 'no'],
+    ['!=', 'yes', 'no', 'yes'],
+  ])('%s below, at and above: %s, %s, %s', (operator, ...answers) => {
+    const holds = [2, 3, 4].map((k) => evaluateText(`if(${k} ${operator} n, 1, 0)`) === 1);
+    expect(holds).toEqual(answers.map((answer) => answer === 'yes'));
+    const folded = [2, 3, 4].map((k) => evaluateText(`if(${k} ${operator} 3, 1, 0)`) === 1);
+    expect(folded).toEqual(holds);
+  });
+});
+
 describe('faults of syntax', () => {
   it.each([
     ['', 'EXPRESSION_SYNTAX', ''],
@@ -175,6 +191,14 @@ describe('namesIn', () => {
       { name: 'wall', start: 11, end: 15 },
       { name: 'centre.x', start: 17, end: 25 },
       { name: 'boom', start: 41, end: 45 },
+    ]);
+  });
+
+  it('places a name without its parentheses or plus', () => {
+    const places = namesIn(parseExpression('(boom) + +wall')).map(({ start, end }) => [start, end]);
+    expect(places).toEqual([
+      [1, 5],
+      [10, 14],
     ]);
   });
 

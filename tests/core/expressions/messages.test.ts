@@ -33,6 +33,8 @@ describe('messages', () => {
     ['3 mn', '"mn" is not a unit', 'did you mean mm?'],
     ['2 boom', '"boom" is not a unit', 'to multiply, write 2 * boom'],
     ['bom', 'nothing is named "bom"', 'did you mean boom?'],
+    ['kgg * 2', 'nothing is named "kgg"', 'did you mean kg?'],
+    ['* 2', '"*" stands where a value should', undefined],
     ['sqrtt(2)', 'there is no function "sqrtt"', 'did you mean sqrt?'],
     ['sqrt', '"sqrt" is a function and needs its arguments', 'write sqrt( … )'],
     ['min(1)', 'min takes at least 2 arguments, not 1', undefined],
@@ -58,7 +60,14 @@ describe('messages', () => {
     expect(fault.hint).toBe(hint);
   });
 
-  it('of a plain number where a field has none name the unit to divide by', () => {
+  it('cut a long part short', () => {
+    const long = 'boom * boom * boom * boom * boom * boom * boom';
+    expect(faultOf(long, MM).message).toBe(
+      'expected a length, and boom * boom * boom * boom * boom * boom… is a quantity in m^7',
+    );
+  });
+
+  it('name both kinds, and the length of a text too long', () => {
     expect(faultOf('load', MM).message).toBe('expected a length, and load is a mass');
     expect(faultOf(`1 + ${'1 + '.repeat(499)}1`).message).toBe(
       'an expression has at most 2000 characters; this one has 2001',

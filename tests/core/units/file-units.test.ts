@@ -78,7 +78,7 @@ describe('a value in a unit', () => {
     expect(toSi(1.2, getUnit('mm'))).toBe(0.0012);
     expect(toSi(12, getUnit('mm'))).toBe(0.012);
     expect(toSi(2, getUnit('km'))).toBe(2000);
-    expect(fromSi(0.0012, getUnit('mm'))).toBe(1.2);
+    for (let k = 1; k < 2000; k++) expect(fromSi(Number(`${k}e-4`), getUnit('mm'))).toBe(k / 10);
     expect(toSi(2, getUnit('in'))).toBe(0.0508);
   });
 });
