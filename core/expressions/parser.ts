@@ -1,21 +1,11 @@
-import { nearestName } from '../nearest-name.ts';
 import { findUnit } from '../units/unit-table.ts';
 import type { Ast, BinaryOperator, Comparison } from './ast.ts';
-import {
-  type Cursor,
-  isSymbol,
-  nested,
-  peek,
-  previous,
-  startOf,
-  take,
-  takeOneOf,
-  valueExpected,
-} from './cursor.ts';
+import { type Cursor, isSymbol, nested, peek, startOf, take, takeOneOf, valueExpected } from './cursor.ts';
 import { ExpressionError, syntaxError } from './expression-error.ts';
 import { parseNumber } from './parse-number.ts';
+import { checkCount, leftOver, unknownFunction } from './parser-faults.ts';
 import type { Token } from './tokenizer.ts';
-import { argumentCounts, FUNCTION_NAMES, type FunctionName, isFunctionName } from './vocabulary.ts';
+import { isFunctionName } from './vocabulary.ts';
 
 // The grammar. Blanks may stand between any two tokens.
 //
@@ -160,15 +150,6 @@ function parseCall(cursor: Cursor): Ast {
   return { kind: 'call', name, arguments: list, start: token.start, end };
 }
 
-function checkCount(name: FunctionName, count: number, span: { start: number; end: number }): void {
-  const { fewest, most } = argumentCounts(name);
-  if (count >= fewest && count <= most) return;
-  const wanted = most === fewest ? `${fewest}` : `at least ${fewest}`;
-  const noun = wanted === '1' ? 'argument' : 'arguments';
-  const hint = name === 'if' ? 'write if(condition, value when true, value when false)' : undefined;
-  throw syntaxError(`${name} takes ${wanted} ${noun}, not ${count}`, span, hint);
-}
-
 /** Takes `)` and gives its end. */
 function closeParenthesis(cursor: Cursor, open: Token): number {
   const close = take(cursor, ')');
@@ -176,32 +157,4 @@ function closeParenthesis(cursor: Cursor, open: Token): number {
   if (peek(cursor).kind === 'end')
     throw syntaxError('this parenthesis is not closed', open, 'write the missing )');
   throw leftOver(cursor);
-}
-
-function unknownFunction(token: Token): ExpressionError {
-  if (findUnit(token.text) !== undefined || token.text === 'pi')
-    return syntaxError(`"${token.text}" is not a function`, token, 'to multiply, write *');
-  const near = nearestName(token.text, FUNCTION_NAMES);
-  const hint = near === undefined ? `the functions are ${FUNCTION_NAMES.join(' ')}` : `did you mean ${near}?`;
-  return new ExpressionError('EXPRESSION_UNKNOWN_NAME', `there is no function "${token.text}"`, token, hint);
-}
-
-/** The fault of a token after a complete expression. */
-function leftOver(cursor: Cursor): ExpressionError {
-  const token = peek(cursor);
-  const before = previous(cursor)!.text;
-  if (token.text === ',')
-    return syntaxError(
-      'a comma stands only between arguments of a function',
-      token,
-      'the decimal mark is a point',
-    );
-  if (token.text === ')') return syntaxError('this parenthesis was never opened', token);
-  if (before === '%')
-    return syntaxError(`an operator is missing before "${token.text}"`, token, '% means per cent');
-  return syntaxError(
-    `an operator is missing before "${token.text}"`,
-    token,
-    `to multiply, write ${before} * ${token.text}`,
-  );
 }
