@@ -13,10 +13,10 @@ const units = z.strictObject({
 });
 
 const frameWords = z.strictObject({
-  origin: text.optional().describe('where the origin lies, in words'),
-  x: text.optional().describe('where x points, in words'),
-  y: text.optional().describe('where y points, in words'),
-  z: text.optional().describe('where z points, in words'),
+  origin: text.describe('where the origin lies, in words'),
+  x: text.describe('where x points, in words'),
+  y: text.describe('where y points, in words'),
+  z: text.describe('where z points, in words'),
   note,
 });
 

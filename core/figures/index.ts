@@ -27,5 +27,5 @@ export {
   printTensor,
   tensorRows,
 } from './printed-tensor.ts';
-export { PLAIN_ROOM, type Scale, scaleFor, TENSOR_ROOM } from './scale.ts';
+export { inUnit, PLAIN_ROOM, type Scale, scaleFor, TENSOR_ROOM } from './scale.ts';
 export { unitText } from './unit-text.ts';

@@ -54,4 +54,4 @@ export const SOLIDS: readonly SolidKind[] = ORDER.map((name) => byName.get(name)
 export const SOLID_NAMES: readonly SolidName[] = ORDER;
 
 /** @returns undefined for a name that is not a solid's */
-export const solidNamed = (name: string): SolidKind | undefined => byName.get(name);
+export const solidByName = (name: string): SolidKind | undefined => byName.get(name);
