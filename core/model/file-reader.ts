@@ -76,8 +76,10 @@ export class FileReader {
     const kind = given.u !== undefined ? 'u' : given.tol !== undefined ? 'tol' : null;
     if (kind === null) return null;
     const text = given[kind]!;
-    const relative = /%\s*$/.test(text);
-    const expression = this.expression(text, relative ? PLAIN_UNIT : field, within(where, kind));
+    const at = within(where, kind);
+    const free = this.expression(text, null, at);
+    const relative = free.isPercentage;
+    const expression = relative ? free : this.expression(text, field, at);
     if (expression.constant !== undefined && !(expression.constant >= 0))
       this.fault(within(where, kind), {
         code: 'MODEL_UNCERTAINTY_NEGATIVE',

@@ -1,6 +1,8 @@
 import type { ParameterDocument } from '../document/index.ts';
 import {
+  composedName,
   ExpressionError,
+  isParameterName,
   isReservedName,
   lookupIn,
   orderParameters,
@@ -10,8 +12,6 @@ import {
 import type { FileReader } from './file-reader.ts';
 import type { ParameterModel, Quantity } from './model.ts';
 import { type Where, within } from './where.ts';
-
-const NAME = /^[\p{L}_][\p{L}\p{N}_]*$/u;
 
 export interface Parameters {
   readonly list: readonly ParameterModel[];
@@ -36,7 +36,7 @@ export function readParameters(
     const text = typeof given === 'string' ? given : given.value;
     const where = typeof given === 'string' ? within(root, name) : within(within(root, name), 'value');
     try {
-      return [{ name, ast: parseExpression(text), where }];
+      return [{ name: composedName(name), key: name, ast: parseExpression(text), where }];
     } catch (error) {
       if (!(error instanceof ExpressionError)) throw error;
       reader.expressionFault(error, where);
@@ -46,36 +46,44 @@ export function readParameters(
   reader.faults.check();
   const order = orderOrFault(parsed, reader);
   const values = new Map<string, Quantity>();
+  const keys = valid.map(composedName);
   for (const name of order) {
-    const value = reader.quantity(document![name]!, null, within(root, name));
+    const key = valid[keys.indexOf(name)]!;
+    const value = reader.quantity(document![key]!, null, within(root, key));
     values.set(name, value);
-    slots.set(name, { dimension: value.expression.dimension, slot: valid.indexOf(name) });
+    slots.set(name, { dimension: value.expression.dimension, slot: keys.indexOf(name) });
   }
   reader.faults.check();
-  const list = valid.map((name): ParameterModel => {
-    const given = document![name]!;
-    const value = values.get(name)!;
-    const bound = (key: 'min' | 'max') => {
-      const text = typeof given === 'string' ? undefined : given[key];
-      return text === undefined ? null : boundQuantity(reader, text, value, within(within(root, name), key));
+  const list = valid.map((key): ParameterModel => {
+    const given = document![key]!;
+    const value = values.get(composedName(key))!;
+    const bound = (which: 'min' | 'max') => {
+      const text = typeof given === 'string' ? undefined : given[which];
+      return text === undefined ? null : boundQuantity(reader, text, value, within(within(root, key), which));
     };
-    return { name, value, min: bound('min'), max: bound('max') };
+    return { name: composedName(key), value, min: bound('min'), max: bound('max') };
   });
   return { list, slots };
 }
+
+/** A parameter by its name as someone wrote it: accents may be typed composed or not. */
+export const parameterNamed = (
+  slots: ReadonlyMap<string, SymbolInfo>,
+  name: string,
+): SymbolInfo | undefined => slots.get(composedName(name));
 
 /** A quantity that stands for a parameter's: of its dimension, a bare number in this file's unit for it. */
 export const boundQuantity = (reader: FileReader, text: string, like: Quantity, where: Where): Quantity =>
   reader.quantity(text, reader.unitOf(like.expression.dimension), where);
 
 function checkName(name: string, reader: FileReader, where: Where): boolean {
-  if (NAME.test(name) && !isReservedName(name)) return true;
+  if (isParameterName(name) && !isReservedName(name)) return true;
   reader.fault(where, {
     code: 'PARAMETER_NAME',
-    message: NAME.test(name)
+    message: isParameterName(name)
       ? `expected a parameter name of your own, found '${name}', which is a unit, a function or a quantity`
       : `expected a parameter name of letters, digits and _ that starts with a letter, found '${name}'`,
-    hint: `rename it, for instance '${NAME.test(name) ? `${name}_1` : 'my_parameter'}', here and where it is used`,
+    hint: `rename it, for instance '${isParameterName(name) ? `${name}_1` : 'my_parameter'}', here and where it is used`,
   });
   return false;
 }

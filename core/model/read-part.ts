@@ -4,7 +4,7 @@ import { DENSITY, MASS } from '../units/index.ts';
 import type { FileReader } from './file-reader.ts';
 import type { FileModel, PartModel, Quantity, ShapeModel } from './model.ts';
 import { readBody } from './read-body.ts';
-import { boundQuantity } from './read-parameters.ts';
+import { boundQuantity, parameterNamed } from './read-parameters.ts';
 import { readPlacing } from './read-placing.ts';
 import { readSolid } from './read-shape.ts';
 import { type Where, within } from './where.ts';
@@ -74,7 +74,7 @@ function readInclude(part: PartDocument, context: PartContext, where: Where): Sh
   const values = new Map<number, Quantity>();
   for (const [name, text] of Object.entries(part.with ?? {})) {
     const at = within(within(where, 'with'), name);
-    const symbol = file.slots.get(name);
+    const symbol = parameterNamed(file.slots, name);
     if (symbol) {
       const like = file.parameters[symbol.slot]!.value;
       values.set(symbol.slot, boundQuantity(reader, text, like, at));

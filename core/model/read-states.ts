@@ -2,7 +2,7 @@ import type { StateDocument } from '../document/index.ts';
 import type { FileReader } from './file-reader.ts';
 import type { ParameterModel, PartModel, Quantity, StateModel } from './model.ts';
 import { findPart } from './part-paths.ts';
-import { boundQuantity, type Parameters } from './read-parameters.ts';
+import { boundQuantity, type Parameters, parameterNamed } from './read-parameters.ts';
 import { unknownName } from './read-part.ts';
 import { type Where, within } from './where.ts';
 
@@ -20,7 +20,7 @@ export function readStates(
     const values = new Map<number, Quantity>();
     for (const [parameter, text] of Object.entries(state.parameters ?? {})) {
       const at = within(within(where, 'parameters'), parameter);
-      const symbol = parameters.slots.get(parameter);
+      const symbol = parameterNamed(parameters.slots, parameter);
       if (!symbol) unknownName(reader, at, 'parameter', parameter, parameters.slots.keys());
       else values.set(symbol.slot, boundQuantity(reader, text, parameters.list[symbol.slot]!.value, at));
     }

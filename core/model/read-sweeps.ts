@@ -4,7 +4,7 @@ import { PLAIN_UNIT } from '../units/index.ts';
 import type { FileReader } from './file-reader.ts';
 import type { SweepModel } from './model.ts';
 import { limitLookup } from './read-limits.ts';
-import { boundQuantity, type Parameters } from './read-parameters.ts';
+import { boundQuantity, type Parameters, parameterNamed } from './read-parameters.ts';
 import { unknownName } from './read-part.ts';
 import { within } from './where.ts';
 
@@ -41,7 +41,7 @@ export function readSweeps(
       name,
       vary: Object.entries(sweep.vary).flatMap(([parameter, given]): SweepModel['vary'] => {
         const at = within(within(where, 'vary'), parameter);
-        const symbol = parameters.slots.get(parameter);
+        const symbol = parameterNamed(parameters.slots, parameter);
         if (!symbol) {
           unknownName(reader, at, 'parameter', parameter, parameters.slots.keys());
           return [];

@@ -1,4 +1,5 @@
 import { type Fault, type FaultList, InputError, type Warning } from '../errors.ts';
+import { explainNotFinite } from '../expressions/index.ts';
 import type { Vector3 } from '../linalg/vector3.ts';
 import type { FileModel, Quantity, StateModel, Vector3Quantity } from '../model/model.ts';
 import type { ProjectSource } from '../model/source.ts';
@@ -43,10 +44,18 @@ export function faultAt(scope: Scope, where: Where | null, fault: Omit<Fault, 'a
 export function evaluate(quantity: Quantity, scope: Scope): number {
   const value = quantity.expression.evaluate(scope.values);
   if (Number.isFinite(value)) return value + 0;
-  faultAt(scope, quantity.where, {
+  const { root } = quantity.expression;
+  const why = root && explainNotFinite(root, scope.values);
+  const { places } = scope.file;
+  const path = pathOf(quantity.where);
+  const length = why ? Math.max(1, why.end - why.start) : 1;
+  scope.run.faults.add({
     code: 'EXPRESSION_NOT_FINITE',
-    message: `expected a finite number, found ${Number.isNaN(value) ? 'none: the expression has no value' : 'one too large'} at these parameters`,
-    hint: 'look for a division by zero, a root of a negative number or a power that grows too large',
+    message: `${why?.message ?? 'expected a finite number, found one too large'}, in state '${scope.state.name}'`,
+    at: why ? places.placeInScalar(path, why.start, length) : places.placeOf(path),
+    length,
+    hint:
+      why?.hint ?? 'look for a division by zero, a root of a negative number or a power that grows too large',
   });
   scope.run.faults.check();
   throw new InputError(scope.run.faults.faults);

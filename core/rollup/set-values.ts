@@ -1,6 +1,7 @@
 import { InputError } from '../errors.ts';
 import { compileExpression, ExpressionError } from '../expressions/index.ts';
 import type { FileModel } from '../model/model.ts';
+import { parameterNamed } from '../model/read-parameters.ts';
 import { nearestName } from '../nearest-name.ts';
 import { unitFor } from '../units/index.ts';
 
@@ -13,7 +14,7 @@ import { unitFor } from '../units/index.ts';
 export function setValues(file: FileModel, set: Readonly<Record<string, string>>): Map<number, number> {
   const values = new Map<number, number>();
   for (const [name, text] of Object.entries(set)) {
-    const symbol = file.slots.get(name);
+    const symbol = parameterNamed(file.slots, name);
     if (!symbol) {
       const nearest = nearestName(name, file.slots.keys());
       throw new InputError([
