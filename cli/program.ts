@@ -39,10 +39,6 @@ export function buildProgram(context: Context): Command {
       'Rolls up mass, centre of mass and inertia tensor of assemblies written in YAML,\nand judges them against limits.',
     )
     .version(version, '-V, --version', 'print the version')
-    .option('-q, --quiet', 'no progress and no warnings on stderr')
-    .option('--no-progress', 'no progress on stderr')
-    .option('--no-colour', 'no colour (as NO_COLOR does)')
-    .option('--ascii', 'plain characters alone')
     .showHelpAfterError('(steelyard COMMAND --help shows what a command takes)')
     .configureOutput({ writeOut: (text) => io.out(text), writeErr: (text) => io.err(text) })
     .exitOverride()
@@ -58,19 +54,31 @@ First steps:
   steelyard run drone.yaml        roll it up
   steelyard check drone.yaml      the same, and the limits decide the exit status`,
     )
-    .hook('preAction', (_, action) => applyGlobalOptions(context, action.optsWithGlobals()));
+    .hook('preAction', (_, action) => applySharedOptions(context, action));
   for (const add of [addRun, addCheck, addDiff, addWhy, addSolids, addSchema, addNew, addCompletion])
     add(program, context);
-  for (const command of program.commands) command.exitOverride().copyInheritedSettings(program);
-  program.action(() => program.help());
+  addSharedOptions(program);
+  for (const command of program.commands) addSharedOptions(command);
   return program;
 }
 
-function applyGlobalOptions(context: Context, options: Record<string, unknown>): void {
-  if (options.quiet) context.quiet = true;
-  if (options.progress === false) context.progress = false;
-  if (options.colour === false) context.colour = false;
-  if (options.ascii) context.unicode = false;
+/** They may stand before the command's name or after it. */
+function addSharedOptions(command: Command): void {
+  command
+    .option('-q, --quiet', 'no progress and no warnings on stderr')
+    .option('--no-progress', 'no progress on stderr')
+    .option('--no-colour', 'no colour (as NO_COLOR does)')
+    .option('--ascii', 'plain characters alone');
+}
+
+function applySharedOptions(context: Context, action: Command): void {
+  for (let command: Command | null = action; command; command = command.parent) {
+    const options = command.opts();
+    if (options.quiet) context.quiet = true;
+    if (options.progress === false) context.progress = false;
+    if (options.colour === false) context.colour = false;
+    if (options.ascii) context.unicode = false;
+  }
 }
 
 function statusOf(error: unknown, context: Context): ExitStatus {

@@ -5,15 +5,19 @@ export const SHELLS: readonly string[] = ['bash', 'zsh', 'fish'];
 interface Known {
   readonly name: string;
   readonly about: string;
-  readonly options: readonly { flag: string; about: string; takesValue: boolean }[];
+  readonly options: readonly {
+    flag: string;
+    about: string;
+    takesValue: boolean;
+    choices: readonly string[];
+  }[];
 }
 
 /** A completion script for a shell, made from the commands and options as they are. */
 export function completionScript(shell: string, program: Command): string {
   const commands = program.commands.map(known);
-  const shared = known(program).options;
-  if (shell === 'fish') return fish(commands, shared);
-  return shell === 'zsh' ? zsh(commands, shared) : bash(commands, shared);
+  if (shell === 'fish') return fish(commands);
+  return shell === 'zsh' ? zsh(commands) : bash(commands);
 }
 
 function known(command: Command): Known {
@@ -24,15 +28,22 @@ function known(command: Command): Known {
       flag: o.long ?? o.short ?? '',
       about: o.description,
       takesValue: o.required || o.optional,
+      choices: o.argChoices ?? [],
     })),
   };
 }
 
-const flagsOf = (command: Known, shared: Known['options']) =>
-  [...command.options, ...shared].map((o) => o.flag).join(' ');
+const flagsOf = (command: Known) => command.options.map((o) => o.flag).join(' ');
 
-function bash(commands: readonly Known[], shared: Known['options']): string {
-  const cases = commands.map((c) => `    ${c.name}) words="${flagsOf(c, shared)} --help" ;;`).join('\n');
+function bash(commands: readonly Known[]): string {
+  const cases = commands.map((c) => `    ${c.name}) words="${flagsOf(c)} --help" ;;`).join('\n');
+  const choices = [...new Map(commands.flatMap((c) => c.options.map((o) => [o.flag, o.choices]))).entries()]
+    .filter(([, list]) => list.length > 0)
+    .map(
+      ([flag, list]) =>
+        `    ${flag}) COMPREPLY=( $(compgen -W "${list.join(' ')}" -- "$current") ); return ;;`,
+    )
+    .join('\n');
   return `# bash completion for steelyard
 _steelyard() {
   local current="\${COMP_WORDS[COMP_CWORD]}" command="\${COMP_WORDS[1]}" words
@@ -44,6 +55,9 @@ _steelyard() {
   case "$command" in
 ${cases}
     *) words="--help" ;;
+  esac
+  case "\${COMP_WORDS[COMP_CWORD-1]}" in
+${choices}
   esac
   if [[ "$current" == -* ]]; then
     COMPREPLY=( $(compgen -W "$words" -- "$current") )
@@ -60,13 +74,13 @@ complete -o filenames -F _steelyard steelyard
 const quoted = (text: string) => text.replace(/'/g, `'\\''`);
 const zshAbout = (text: string) => quoted(text.replace(/[[\]:]/g, '\\$&'));
 
-function zsh(commands: readonly Known[], shared: Known['options']): string {
+function zsh(commands: readonly Known[]): string {
   const list = commands.map((c) => `    '${c.name}:${zshAbout(c.about)}'`).join('\n');
   const cases = commands
     .map((c) => {
-      const options = [...c.options, ...shared].map(
+      const options = c.options.map(
         (o) =>
-          `'${o.flag}${o.takesValue ? '=' : ''}[${zshAbout(o.about)}]${o.takesValue ? ':value:_files' : ''}'`,
+          `'${o.flag}${o.takesValue ? '=' : ''}[${zshAbout(o.about)}]${o.takesValue ? (o.choices.length > 0 ? `:value:(${o.choices.join(' ')})` : ':value:_files') : ''}'`,
       );
       const rest = c.name === 'completion' ? `'1:shell:(${SHELLS.join(' ')})'` : `'*:file:_files'`;
       return `    ${c.name}) _arguments ${options.join(' ')} ${rest} ;;`;
@@ -94,20 +108,17 @@ _steelyard "$@"
 `;
 }
 
-function fish(commands: readonly Known[], shared: Known['options']): string {
+function fish(commands: readonly Known[]): string {
   const names = commands.map((c) => c.name).join(' ');
   const lines = commands.flatMap((c) => [
     `complete -c steelyard -n '__fish_use_subcommand' -f -a ${c.name} -d '${quoted(c.about)}'`,
     ...c.options.map(
       (o) =>
-        `complete -c steelyard -n '__fish_seen_subcommand_from ${c.name}' -l ${o.flag.replace(/^--/, '')} ${o.takesValue ? '-r ' : ''}-d '${quoted(o.about)}'`,
+        `complete -c steelyard -n '__fish_seen_subcommand_from ${c.name}' -l ${o.flag.replace(/^--/, '')} ${o.takesValue ? '-r ' : ''}${o.choices.length > 0 ? `-f -a '${o.choices.join(' ')}' ` : ''}-d '${quoted(o.about)}'`,
     ),
   ]);
-  const global = shared.map(
-    (o) => `complete -c steelyard -l ${o.flag.replace(/^--/, '')} -d '${quoted(o.about)}'`,
-  );
   return `# fish completion for steelyard (${names})
-${[...lines, ...global].join('\n')}
+${lines.join('\n')}
 complete -c steelyard -n '__fish_seen_subcommand_from completion' -f -a '${SHELLS.join(' ')}'
 `;
 }

@@ -44,7 +44,7 @@ export interface OutputOptions {
 export function addOutputOptions(command: Command, formats: readonly string[]): Command {
   return command
     .addOption(
-      new Option('-f, --format <format>', `${formats.join(', ')}; table on a terminal, else json`).choices(
+      new Option('-f, --format <format>', "table on a terminal, else json").choices(
         formats,
       ),
     )

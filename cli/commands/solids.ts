@@ -1,4 +1,4 @@
-import type { Command } from 'commander';
+import { type Command, Option } from 'commander';
 import { InputError } from '#core/errors.ts';
 import { nearestName } from '#core/nearest-name.ts';
 import type { Context } from './context.ts';
@@ -8,7 +8,7 @@ export function addSolids(program: Command, context: Context): void {
     .command('solids')
     .description('what each solid takes and where its origin is')
     .argument('[name]', 'one solid, with its keys')
-    .option('--format <format>', 'table or json', 'table')
+    .addOption(new Option('--format <format>', 'how to print').choices(['table', 'json']).default('table'))
     .action(async (name: string | undefined, options: { format: string }) => {
       const { describeSolids } = await import('./describe-solids.ts');
       const { SOLID_HELP_NAMES } = await import('./describe-solids.ts');

@@ -1,0 +1,47 @@
+import { readdirSync, readFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { describe, expect, it } from 'vitest';
+
+const root = join(import.meta.dirname, '..');
+
+/** Codes as the source writes them; those put together from a kind are spelled out. */
+function codesInSource(): Set<string> {
+  const codes = new Set(
+    ['FRAME', 'MATERIAL', 'MATURITY', 'PARAMETER', 'PART', 'QUANTITY', 'STATE'].map(
+      (kind) => `MODEL_UNKNOWN_${kind}`,
+    ),
+  );
+  for (const folder of ['core', 'cli'])
+    for (const name of readdirSync(join(root, folder), { recursive: true, encoding: 'utf8' })) {
+      if (!name.endsWith('.ts')) continue;
+      const text = readFileSync(join(root, folder, name), 'utf8');
+      for (const [, code] of text.matchAll(/'((?:[A-Z]+_)+[A-Z]+)'/g))
+        if (AREAS.test(code!)) codes.add(code!);
+    }
+  return codes;
+}
+
+const AREAS =
+  /^(ASSEMBLY|BODY|CALL|CUT|DENSITY|EXPRESSION|FILE|GIT|GROWTH|INCLUDE|LIMIT|MESH|MODEL|OVERRIDE|PARAMETER|PART|RECORD|REPEAT|ROTATION|SET|SOLID|TEXT|UNITS|YAML)_/;
+
+/** Names in capitals that are constants, not codes. */
+const CONSTANTS = new Set<string>([]);
+
+const table = new Set(
+  [...readFileSync(join(root, 'DEVELOPERS.md'), 'utf8').matchAll(/`((?:[A-Z]+_)+[A-Z]+)`/g)].map(
+    ([, code]) => code!,
+  ),
+);
+
+describe('the table of codes in DEVELOPERS.md', () => {
+  it('has every code that the source can report', () => {
+    const missing = [...codesInSource()].filter((code) => !table.has(code) && !CONSTANTS.has(code));
+    expect(missing).toEqual([]);
+  });
+
+  it('has none that the source no longer knows', () => {
+    const source = codesInSource();
+    const stale = [...table].filter((code) => AREAS.test(code) && !source.has(code));
+    expect(stale).toEqual([]);
+  });
+});
