@@ -162,7 +162,12 @@ export interface PartModel {
   readonly basis: string | null;
   readonly states: readonly string[] | null;
   readonly placing: PlacingModel;
-  readonly override: { readonly mass: Quantity; readonly reason: string; readonly where: Where } | null;
+  readonly override: {
+    readonly mass: Quantity;
+    readonly reason: string;
+    readonly where: Where;
+    readonly line: number;
+  } | null;
   readonly parts: readonly PartModel[];
   readonly note: string | null;
   readonly source: string | null;

@@ -49,6 +49,7 @@ export function readPart(part: PartDocument, context: PartContext, where: Where)
           ),
           reason: part.override.reason,
           where: within(where, 'override'),
+          line: reader.places.lineOf(part.override),
         }
       : null,
     parts: (part.parts ?? []).map((child, i) => readPart(child, context, within(within(where, 'parts'), i))),

@@ -6,7 +6,6 @@ import { transpose } from '../linalg/matrix3.ts';
 import { quaternionFromAxes } from '../linalg/quaternion.ts';
 import { type Symmetric3, toRows } from '../linalg/symmetric3.ts';
 import type { FileModel } from '../model/model.ts';
-import { pathOf } from '../model/where.ts';
 import { leafBody } from '../rollup/leaf-body.ts';
 import { frameNamed, type JudgedLimit, judgeLimits } from '../rollup/limits.ts';
 import type { RollUp } from '../rollup/roll-up.ts';
@@ -213,11 +212,8 @@ function overridesOf(members: readonly Member[], prefix: string): OverrideRecord
     const { part, overridden, scope } = one.node;
     const inside = overridesOf(one.node.members, `${path}/`);
     if (!overridden || !part.override) return inside;
-    const at = scope.file.places.placeOf([...pathOf(part.override.where)]);
-    return [
-      { path, reason: part.override.reason, at: { file: at.file, line: at.line }, ...overridden },
-      ...inside,
-    ];
+    const at = { file: scope.file.path, line: part.override.line };
+    return [{ path, reason: part.override.reason, at, ...overridden }, ...inside];
   });
 }
 
