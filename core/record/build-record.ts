@@ -5,6 +5,7 @@ import { bodyInFrame } from '../inertia/quantities.ts';
 import { transpose } from '../linalg/matrix3.ts';
 import { quaternionFromAxes } from '../linalg/quaternion.ts';
 import { type Symmetric3, toRows } from '../linalg/symmetric3.ts';
+import type { MeshReport } from '../mesh/mesh-body.ts';
 import type { FileModel } from '../model/model.ts';
 import { leafBody } from '../rollup/leaf-body.ts';
 import { frameNamed, type JudgedLimit, judgeLimits } from '../rollup/limits.ts';
@@ -19,6 +20,7 @@ import type {
   FrameTotals,
   InputRecord,
   LimitResult,
+  MeshRecord,
   OverrideRecord,
   ParameterRecord,
   PartBody,
@@ -155,8 +157,22 @@ function partRecord(
     share: { mass: (leaf.sign * predicted.mass) / total.mass, xx: share(0), yy: share(1), zz: share(2) },
     note: part.note,
     source: part.source,
+    ...(node.own?.mesh && { mesh: meshRecord(node.own.mesh) }),
   };
 }
+
+const meshRecord = (report: MeshReport): MeshRecord => ({
+  format: report.format,
+  triangles: report.triangles,
+  vertices: report.vertices,
+  collapsed: report.dropped,
+  shells: report.shells,
+  voids: report.voids,
+  openEdges: report.openEdges,
+  volume: report.volume,
+  area: report.area,
+  size: [0, 1, 2].map((k) => report.extent.max[k]! - report.extent.min[k]!),
+});
 
 /** Predicted over basic less one, overrides around it included; from the factors, for a part may weigh nothing. */
 const growthOfLeaf = ({ node, factor }: Leaf): number =>

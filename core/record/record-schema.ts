@@ -68,6 +68,20 @@ const part = z.object({
   share: z.object({ mass: number, xx: number, yy: number, zz: number }),
   note: text,
   source: text,
+  mesh: z
+    .object({
+      format: z.string(),
+      triangles: number,
+      vertices: number,
+      collapsed: number,
+      shells: number,
+      voids: number,
+      openEdges: number,
+      volume: number,
+      area: number,
+      size: vector3,
+    })
+    .optional(),
 });
 
 export const recordSchema: z.ZodType<RollUpRecord> = z.object({

@@ -154,6 +154,28 @@ export interface PartRecord {
   share: { mass: number; xx: number; yy: number; zz: number };
   note: string | null;
   source: string | null;
+  /** What was found in a mesh file; absent for other parts. */
+  mesh?: MeshRecord;
+}
+
+/** A mesh as it was read: nothing is mended or hulled in silence. */
+export interface MeshRecord {
+  format: string;
+  triangles: number;
+  vertices: number;
+  /** Triangles left out because two of their corners are one point. */
+  collapsed: number;
+  /** Closed surfaces, those that bound a void included. */
+  shells: number;
+  voids: number;
+  /** Edges without a neighbour; more than none only in a thin mesh. */
+  openEdges: number;
+  /** [m³], 0 for a thin mesh. */
+  volume: number;
+  /** [m²] */
+  area: number;
+  /** Size of its bounding box along its own axes [m]: the check of its unit. */
+  size: number[];
 }
 
 /** A part's own ten numbers in the assembly's body axes; inertia about the part's own centre, products negative. */

@@ -1,5 +1,6 @@
 import type { Body } from '../inertia/body.ts';
 import { scaleBody } from '../inertia/body.ts';
+import type { MeshReport } from '../mesh/mesh-body.ts';
 import { densityFault } from '../model/density-fault.ts';
 import type { DimensionModel, PartModel, Quantity, ShapeModel } from '../model/model.ts';
 import { within } from '../model/where.ts';
@@ -19,6 +20,8 @@ export interface OwnBody {
   readonly extent: Extent | null;
   /** Dimensions with twins resolved, for drawings. */
   readonly dimensions: SolidDimensions | null;
+  /** What was found in reading a mesh. */
+  readonly mesh?: MeshReport;
 }
 
 /** A thin solid thicker than this share of its smallest size is not thin. */
@@ -80,12 +83,12 @@ function meshBody(
     });
   const thickness = shape.thickness && evaluate(shape.thickness, scope);
   if (thickness !== null) {
-    const size = [0, 1, 2].map((k) => reading.extent.max[k]! - reading.extent.min[k]!);
+    const size = [0, 1, 2].map((k) => reading.report.extent.max[k]! - reading.report.extent.min[k]!);
     checkThickness(part, shape, thickness, Math.max(...size), scope);
   }
   const family = shape.fill === 'shell' ? 'thin' : 'solid';
   const made = withMass(part, reading.body, thickness, family, hostDensity, scope);
-  return made && { ...made, extent: reading.extent, dimensions: null };
+  return made && { ...made, extent: reading.report.extent, dimensions: null, mesh: reading.report };
 }
 
 /** Scales a body of unit density (or unit mass per area) to the part's mass. */
@@ -101,6 +104,7 @@ function withMass(
     family === 'solid' ? unit.mass : family === 'thin' && thickness !== null ? unit.mass * thickness : null;
   if (part.mass) {
     const mass = massOf(part.mass, part, scope);
+    if (volume !== null && mass > 0) warnIfDoubtful(part, mass / volume, scope);
     // A particle's or a line's own measure may be 1 or a length; anything but zero scales.
     return { body: scaleBody(unit, mass / unit.mass), density: volume === null ? null : mass / volume };
   }
@@ -119,6 +123,20 @@ function withMass(
     return null;
   }
   return { body: scaleBody(unit, (density * volume) / unit.mass), density };
+}
+
+/** Lighter than air [kg/m³]: the size is then too large for the mass by powers of ten. */
+const DENSITY_AT_LEAST = 1;
+
+/** A stated mass in a stated shape implies a density; one that nothing has is a slip of units in either. */
+function warnIfDoubtful(part: PartModel, density: number, scope: Scope): void {
+  const heavy = densityFault(density) !== null;
+  if (!heavy && density >= DENSITY_AT_LEAST) return;
+  scope.run.warnings.push({
+    code: 'SOLID_DENSITY_DOUBTFUL',
+    message: `${scope.prefix}${part.name}: this mass in this shape is ${Number((density / 1000).toPrecision(3))} g/cm^3, ${heavy ? 'denser than any material' : 'lighter than air'}; look for a slip of units`,
+    at: { file: scope.file.path, line: part.line },
+  });
 }
 
 /** A mass that is stated: not negative; zero only with a warning. */

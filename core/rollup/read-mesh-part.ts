@@ -1,17 +1,16 @@
 import { InputError } from '../errors.ts';
 import type { Body } from '../inertia/body.ts';
-import { meshShell, meshSolid } from '../mesh/mesh-body.ts';
+import { type MeshReport, meshShell, meshSolid } from '../mesh/mesh-body.ts';
 import { MeshError } from '../mesh/mesh-error.ts';
 import { readMesh } from '../mesh/read-mesh.ts';
 import type { ShapeModel } from '../model/model.ts';
 import { within } from '../model/where.ts';
-import type { Extent } from '../solids/dimensions.ts';
 import { evaluate, faultAt, type Scope } from './scope.ts';
 
 /** A mesh file as a part uses it: unit density (or unit mass per area), in metres. */
 export interface MeshReading {
   readonly body: Body;
-  readonly extent: Extent;
+  readonly report: MeshReport;
   readonly notes: readonly { code: string; message: string }[];
 }
 
@@ -28,7 +27,7 @@ export function readMeshPart(shape: ShapeModel & { kind: 'mesh' }, scope: Scope)
     run.meshInputs.set(path, { sha256, bytes: bytes.length });
     const mesh = readMesh(bytes, { unit: shape.unit.factor, weld });
     const { body, report, notes } = shape.fill === 'shell' ? meshShell(mesh) : meshSolid(mesh);
-    const reading = { body, extent: report.extent, notes };
+    const reading = { body, report, notes };
     run.meshes.set(key, reading);
     return reading;
   } catch (error) {

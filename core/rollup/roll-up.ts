@@ -10,6 +10,7 @@ import { membersOf, NOTHING_INHERITED, openScope } from './part-tree.ts';
 import { faultAt, type Run, type Scope } from './scope.ts';
 import { type Both, type Leaf, leavesOf, type Member, netBodies } from './tree.ts';
 import { impossible } from './vendor-body.ts';
+import { gyrationWarnings } from './warn-gyration.ts';
 
 /** One assembly in one state, rolled up. */
 export interface RollUp {
@@ -75,12 +76,14 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
     });
   run.faults.check();
   warnWithoutMaturity(run);
+  const leaves = [...leavesOf(members)];
+  run.warnings.push(...gyrationWarnings(leaves));
   return {
     project,
     state: options.state,
     scope,
     members,
-    leaves: [...leavesOf(members)],
+    leaves,
     moments,
     total: body,
     warnings: run.warnings,
