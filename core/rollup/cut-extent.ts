@@ -45,10 +45,11 @@ function boxOf(node: PartNode, placement: Placement): Extent | null {
   if (node.own) boxes.push(node.own.extent);
   if (boxes.length === 0 || boxes.some((b) => b === null)) return null;
   const local = boxes.reduce((a, b) => join(a!, b!))!;
-  return boxAround(corners(local).map((p) => placePoint(placement, p)));
+  return boxAround(cornersOf(local).map((p) => placePoint(placement, p)));
 }
 
-const corners = ({ min, max }: Extent): Vector3[] =>
+/** The eight corners of a box. */
+export const cornersOf = ({ min, max }: Extent): Vector3[] =>
   [0, 1, 2, 3, 4, 5, 6, 7].map((i) => [
     (i & 1 ? max : min)[0],
     (i & 2 ? max : min)[1],

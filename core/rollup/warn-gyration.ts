@@ -1,18 +1,19 @@
 import type { Warning } from '../errors.ts';
 import { inertiaAboutCentre } from '../inertia/body.ts';
 import { placePoint } from '../inertia/placement.ts';
+import { cornersOf } from './cut-extent.ts';
 import { leafBody } from './leaf-body.ts';
 import type { Leaf } from './tree.ts';
 
 /**
  * A bought item whose radius of gyration is larger than the whole machine cannot be in it: its tensor is too large for
- * its mass by powers of ten. The machine's size is that of the box around every other part.
+ * its mass by powers of ten.
  */
 export function gyrationWarnings(leaves: readonly Leaf[]): Warning[] {
   const bodies = leaves.filter((leaf) => leaf.node.part.shape.kind === 'body');
+  if (bodies.length === 0) return [];
+  const size = sizeOf(leaves);
   return bodies.flatMap((leaf) => {
-    const others = leaves.filter((other) => other.node !== leaf.node);
-    const size = sizeOf(others, leaf);
     const body = leafBody(leaf, 'basic');
     const gyration = Math.sqrt(Math.max(0, ...inertiaAboutCentre(body).slice(0, 3)) / body.mass);
     if (!(size > 0 && gyration > size)) return [];
@@ -27,9 +28,8 @@ export function gyrationWarnings(leaves: readonly Leaf[]): Warning[] {
   });
 }
 
-/** Diagonal of the box around the other parts and this one's centre [m]. */
-function sizeOf(others: readonly Leaf[], self: Leaf): number {
-  if (others.length === 0) return 0;
+/** Diagonal of the box around all solids and the centres of all bodies [m]; zero where there is one body alone. */
+function sizeOf(leaves: readonly Leaf[]): number {
   const min = [Infinity, Infinity, Infinity];
   const max = [-Infinity, -Infinity, -Infinity];
   const take = (p: readonly number[]) => {
@@ -38,19 +38,10 @@ function sizeOf(others: readonly Leaf[], self: Leaf): number {
       max[k] = Math.max(max[k]!, p[k]!);
     }
   };
-  take(placePoint(self.placement, self.node.own!.body.centre));
-  for (const leaf of others) {
+  for (const leaf of leaves) {
     const { body, extent } = leaf.node.own!;
     if (!extent) take(placePoint(leaf.placement, body.centre));
-    else
-      for (let i = 0; i < 8; i++)
-        take(
-          placePoint(leaf.placement, [
-            (i & 1 ? extent.max : extent.min)[0],
-            (i & 2 ? extent.max : extent.min)[1],
-            (i & 4 ? extent.max : extent.min)[2],
-          ]),
-        );
+    else for (const corner of cornersOf(extent)) take(placePoint(leaf.placement, corner));
   }
   const d = [0, 1, 2].map((k) => max[k]! - min[k]!);
   return Math.sqrt(d[0]! * d[0]! + d[1]! * d[1]! + d[2]! * d[2]!);
