@@ -40,4 +40,6 @@ export class MemorySource implements ProjectSource {
 }
 
 const fault = (code: string, path: string) =>
-  new InputError([{ code, message: `expected a file of the project, found none at ${path}`, hint: 'add it' }]);
+  new InputError([
+    { code, message: `expected a file of the project, found none at ${path}`, hint: 'add it' },
+  ]);
