@@ -162,7 +162,7 @@ describe('hand checks, with lines of their own', () => {
       ...['--state', 'stretched', '--format', 'json'],
     ]);
     const [part] = JSON.parse(stdout);
-    const body = (part.of ?? part).basic;
+    const body = part.basic;
     expect(body.mass * 1e3).toBeCloseTo(mass, 6);
     expect(body.centre[0] * 1e3).toBeCloseTo(380 + x, 6);
     const limits = roll('examples/two-link-arm/arm.yaml', '--state', 'stretched')[0]!.limits as unknown as {
@@ -172,6 +172,25 @@ describe('hand checks, with lines of their own', () => {
     const value = (name: string) => limits.find((l) => l.name === name)!.value;
     expect(value('elbow drive inertia') * 1e9).toBeCloseTo(yy, 2);
     expect(value('forearm static moment') * 1e6).toBeCloseTo(mass * x, 4);
+  });
+
+  it("the bracket's mass and centre follow from the outline that its mesh extrudes", async () => {
+    const { OUTLINE, WIDTH } = await import(join(root, 'examples/two-link-arm/make-bracket.js'));
+    const corners = OUTLINE as [number, number][];
+    let area = 0;
+    let first = [0, 0];
+    corners.forEach(([x, z], i) => {
+      const [x2, z2] = corners[(i + 1) % corners.length]!;
+      const cross = x * z2 - x2 * z;
+      area += cross / 2;
+      first = [first[0]! + (cross * (x + x2)) / 6, first[1]! + (cross * (z + z2)) / 6];
+    });
+    const path = ['--of', 'wall bracket', '--state', 'stretched', '--format', 'json'];
+    const [{ basic }] = JSON.parse(steelyard(['run', 'examples/two-link-arm/arm.yaml', ...path]).stdout);
+    expect(basic.mass).toBeCloseTo(7.85e-6 * area * WIDTH, 12);
+    expect(basic.centre[0] * 1e3).toBeCloseTo(-90 + first[0]! / area, 9);
+    expect(basic.centre[1] * 1e3).toBeCloseTo(-30 + WIDTH / 2, 9);
+    expect(basic.centre[2] * 1e3).toBeCloseTo(-70 + first[1]! / area, 9);
   });
 
   it("the spinning payload's mass and centre add up part by part", () => {
