@@ -43,11 +43,7 @@ export interface OutputOptions {
 
 export function addOutputOptions(command: Command, formats: readonly string[]): Command {
   return command
-    .addOption(
-      new Option('-f, --format <format>', "table on a terminal, else json").choices(
-        formats,
-      ),
-    )
+    .addOption(new Option('-f, --format <format>', 'table on a terminal, else json').choices(formats))
     .addOption(
       new Option(
         '-o, --out <file>',

@@ -3,7 +3,7 @@ import type { Vector3 } from '../linalg/vector3.ts';
 import { judgeTensor } from './possibility.ts';
 
 /** A vendor's tensor as it stands in the file, for asking what else it might have meant. */
-export interface GivenTensor {
+export interface ImpossibleTensor {
   readonly mass: number;
   /** From the part's origin [m]. */
   readonly centre: Vector3;
@@ -45,7 +45,7 @@ const reorder = (j: Symmetric3, slots: readonly number[]): Symmetric3 =>
  *
  * @returns phrases such as "with the products' sign the other way"; empty when none helps
  */
-export function possibleReadings(given: GivenTensor): string[] {
+export function possibleReadings(given: ImpossibleTensor): string[] {
   const shift: Vector3 = [
     given.centre[0] - given.about[0],
     given.centre[1] - given.about[1],
