@@ -38,8 +38,15 @@ export function checkOmitted(
   for (const state of states)
     state.omit.forEach((path, i) => {
       const found = findPart(parts, path);
+      const where = within(within(state.where, 'omit'), i);
+      if (/\[\d+\]\//.test(path))
+        reader.fault(where, {
+          code: 'MODEL_UNKNOWN_PART',
+          message: `expected the path of a part or of one whole copy, found '${path}', which is inside one copy`,
+          hint: 'copies are alike: leave the part out of all of them by its path without [n]',
+        });
       if (!('unknown' in found)) return;
-      reader.fault(within(within(state.where, 'omit'), i), {
+      reader.fault(where, {
         code: 'MODEL_UNKNOWN_PART',
         message: `expected the path of a part, found '${path}', in which '${found.unknown}' is not one`,
         hint: found.nearest

@@ -84,13 +84,16 @@ interface Target {
   readonly leaves: readonly Leaf[];
 }
 
-/** What a limit weighs: the whole, or the part or group of its `of`, in body axes. */
+/**
+ * What a limit weighs: the whole, or the part or group of its `of`, in body axes. A part that this state leaves out
+ * weighs nothing, and has no centre or tensor.
+ */
 function targetOf(limit: LimitModel, roll: RollUp): Target {
   if (limit.of === null) return { bodies: roll.total, masses: netMasses(roll.moments), leaves: roll.leaves };
   return (
     targetAt(limit.of, roll) ?? {
       bodies: { basic: null, predicted: null },
-      masses: { basic: Number.NaN, predicted: Number.NaN },
+      masses: { basic: 0, predicted: 0 },
       leaves: [],
     }
   );

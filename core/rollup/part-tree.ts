@@ -3,6 +3,7 @@ import { scaleBody } from '../inertia/body.ts';
 import { compose } from '../inertia/placement.ts';
 import { judgeBody } from '../inertia/possibility.ts';
 import type { FileModel, PartModel } from '../model/model.ts';
+import { within } from '../model/where.ts';
 import { formatQuantity, MASS, unitFor } from '../units/index.ts';
 import { onBoth, placeMoments, scaleMoments, sumAndClose, turnToCut } from './both-moments.ts';
 import { copiesOf } from './copies.ts';
@@ -44,7 +45,7 @@ export function membersOf(
 function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: Scope): Member | null {
   const path = prefix + part.name;
   if (part.states && !part.states.includes(scope.state.name)) return null;
-  if (scope.state.omit.includes(path)) return null;
+  if (scope.omit.has(path)) return null;
   const node = nodeOf(part, path, inherited, scope);
   if (!node) return null;
   const anchor = part.placing.anchor === 'centroid' ? (node.own?.body.centre ?? ORIGIN) : ORIGIN;
@@ -52,9 +53,11 @@ function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: 
   if (part.placing.repeat.length === 0)
     return { kind: 'one', name: part.name, node, placement, moments: placeMoments(placement, node.moments) };
   const placed = placeMoments(placement, node.moments);
-  const copies = copiesOf(repeatsOf(part.placing.repeat, scope)).flatMap((copy, i) => {
+  const standings = copiesOf(repeatsOf(part.placing.repeat, scope));
+  checkOmittedCopies(path, standings.length, scope);
+  const copies = standings.flatMap((copy, i) => {
     const name = `${part.name}[${i + 1}]`;
-    if (scope.state.omit.includes(`${prefix}${name}`)) return [];
+    if (scope.omit.has(prefix + name)) return [];
     return {
       kind: 'one' as const,
       name,
@@ -64,6 +67,19 @@ function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: 
     };
   });
   return { kind: 'copies', name: part.name, copies, moments: sumAndClose(copies.map((c) => c.moments)) };
+}
+
+/** A state may leave single copies out; one that does not exist is a slip. */
+function checkOmittedCopies(path: string, count: number, scope: Scope): void {
+  scope.state.omit.forEach((omitted, i) => {
+    const copy = omitted.startsWith(`${path}[`) && /^\[(\d+)\]$/.exec(omitted.slice(path.length));
+    if (!copy || (Number(copy[1]) >= 1 && Number(copy[1]) <= count)) return;
+    faultAt(scope, within(within(scope.state.where, 'omit'), i), {
+      code: 'MODEL_UNKNOWN_PART',
+      message: `expected a copy from ${path}[1] to ${path}[${count}], found '${omitted}'`,
+      hint: 'copies are counted from 1, the original first',
+    });
+  });
 }
 
 function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scope): PartNode | null {
@@ -163,14 +179,7 @@ function includedMembers(
 ): Member[] {
   const { file } = shape;
   const set = new Map([...shape.with].map(([slot, quantity]) => [slot, evaluate(quantity, scope)]));
-  const inner = openScope(
-    file,
-    includedState(part, shape, scope),
-    set,
-    scope.run,
-    `${scope.prefix}${path}/`,
-    scope,
-  );
+  const inner = openScope(file, includedState(part, shape, scope), set, scope.run, path, scope);
   return inner ? membersOf(file.parts, '', { ...attributes, hostDensity: null }, inner) : [];
 }
 
@@ -194,18 +203,34 @@ function includedState(
   return file.states[0]!.name;
 }
 
-/** A scope for one file at one state, its parameters and growth allowances evaluated. */
+/**
+ * A scope for one file at one state, its parameters and growth allowances evaluated.
+ *
+ * @param path of the part that includes the file, in the outer scope's file; empty for the top file
+ */
 export function openScope(
   file: FileModel,
   stateName: string,
   set: ReadonlyMap<number, number>,
   run: Scope['run'],
-  prefix: string,
+  path: string,
   outer: Scope | null,
 ): Scope {
   const state = file.states.find((s) => s.name === stateName)!;
   const values = new Float64Array(file.parameters.length);
-  const bare: Scope = { run, file, state, values, growth: outer?.growth ?? null, prefix };
+  const below = `${path}/`;
+  const fromOuter = [...(outer?.omit ?? [])]
+    .filter((p) => p.startsWith(below))
+    .map((p) => p.slice(below.length));
+  const bare: Scope = {
+    run,
+    file,
+    state,
+    values,
+    growth: outer?.growth ?? null,
+    omit: new Set([...state.omit, ...fromOuter]),
+    prefix: outer ? `${outer.prefix}${below}` : '',
+  };
   fillParameters(bare, set);
   return file.growth ? { ...bare, growth: growthTablesOf(file.growth, bare) } : bare;
 }

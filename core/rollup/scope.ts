@@ -29,6 +29,8 @@ export interface Scope {
   readonly values: Float64Array;
   /** Growth allowances in force, evaluated; the including file's where this one has none. */
   readonly growth: GrowthTables | null;
+  /** Paths of parts, in this file, that the state or a state of an including file leaves out. */
+  readonly omit: ReadonlySet<string>;
   /** Path of the part that includes this file, with a slash at the end; empty for the top file. */
   readonly prefix: string;
 }
