@@ -1,6 +1,6 @@
 // Bundles the command into dist/: one entry and chunks that load only when a command needs them.
 // Run by `npm run build`, by `npm ci` through `prepare`, and by the first `npm start`.
-import { readFileSync, rmSync } from 'node:fs';
+import { mkdtempSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
@@ -9,8 +9,9 @@ const root = join(dirname(fileURLToPath(import.meta.url)), '..');
 export async function build() {
   const { build: bundle } = await import('esbuild');
   const { version } = JSON.parse(readFileSync(join(root, 'package.json'), 'utf8'));
-  const outdir = join(root, 'dist');
-  rmSync(outdir, { recursive: true, force: true });
+  // Beside its place, and moved there when whole: a failed build leaves the command as it was.
+  const outdir = mkdtempSync(join(root, '.dist-'));
+  const dist = join(root, 'dist');
   await bundle({
     absWorkingDir: root,
     entryPoints: { steelyard: 'cli/main.ts' },
@@ -27,7 +28,12 @@ export async function build() {
       js: "#!/usr/bin/env node\nimport{createRequire as __createRequire}from'node:module';const require=__createRequire(import.meta.url);",
     },
     logLevel: 'warning',
+  }).catch((error) => {
+    rmSync(outdir, { recursive: true, force: true });
+    throw error;
   });
+  rmSync(dist, { recursive: true, force: true });
+  renameSync(outdir, dist);
 }
 
 if (process.argv[1] === fileURLToPath(import.meta.url)) {
