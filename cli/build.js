@@ -1,6 +1,6 @@
 // Bundles the command into dist/: one entry and chunks that load only when a command needs them.
 // Run by `npm run build`, by `npm ci` through `prepare`, and by the first `npm start`.
-import { mkdtempSync, readFileSync, renameSync, rmSync } from 'node:fs';
+import { chmodSync, mkdtempSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
@@ -32,6 +32,7 @@ export async function build() {
     rmSync(outdir, { recursive: true, force: true });
     throw error;
   });
+  chmodSync(outdir, 0o755);
   rmSync(dist, { recursive: true, force: true });
   renameSync(outdir, dist);
 }

@@ -3,7 +3,7 @@ import { type Body, inertiaAboutCentre, inertiaAboutPoint, scaleBody } from '../
 import { toRows } from '../../../core/linalg/symmetric3.ts';
 import type { Vector3 } from '../../../core/linalg/vector3.ts';
 import type { SolidDimensions } from '../../../core/solids/dimensions.ts';
-import { solidNamed } from '../../../core/solids/registry.ts';
+import { solidByName } from '../../../core/solids/registry.ts';
 import { resolveTwins } from '../../../core/solids/twins.ts';
 import { expectClose, nine } from '../../helpers/expect-body.ts';
 import { REFERENCE_CASES, referenceCase } from '../../helpers/reference-cases.ts';
@@ -114,7 +114,7 @@ const ROWS: Record<string, Row> = {
 const NOT_SOLIDS = ['S-quarter-cylinder', 'S-half-ring'];
 
 function makeSolid(name: string, given: SolidDimensions): Body {
-  const solid = solidNamed(name)!;
+  const solid = solidByName(name)!;
   const dims = resolveTwins(solid, given);
   expect(solid.check(dims)).toBeNull();
   return solid.make(dims);
