@@ -29,7 +29,10 @@ export function matchAxes(a: AxesOf, b: AxesOf): MatchedAxes {
   // Ties are broken from the side whose tensor comes first, so that both directions break them alike.
   const forward = comesFirst(a.tensor, b.tensor);
   const toB = forward ? assign(ea, a.free, eb, b.free) : invert(assign(eb, b.free, ea, a.free));
-  const groups = joined(a.free, b.free.map((rank) => toB.indexOf(rank)));
+  const groups = joined(
+    a.free,
+    b.free.map((rank) => toB.indexOf(rank)),
+  );
   return { a: ea, b: eb, toB, groups };
 }
 

@@ -61,7 +61,9 @@ function pairOf(a: PartBody | null, b: PartBody | null): Pair | null {
     centres: [first.centre, second.centre],
     shapes: [
       six((k) => first.inertia[k] / first.mass),
-      first === second ? six((k) => first.inertia[k] / first.mass) : six((k) => second.inertia[k] / second.mass),
+      first === second
+        ? six((k) => first.inertia[k] / first.mass)
+        : six((k) => second.inertia[k] / second.mass),
     ],
   };
 }
