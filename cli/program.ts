@@ -52,7 +52,7 @@ Exit status: 0 fine, 1 a limit is broken, 2 the input or the call is wrong,
 First steps:
   steelyard new drone.yaml        a starter assembly
   steelyard run drone.yaml        roll it up
-  steelyard check drone.yaml      the same, and the limits decide the exit status`,
+  steelyard check drone.yaml      the same, and the limits decide the status`,
     )
     .hook('preAction', (_, action) => applySharedOptions(context, action));
   for (const add of [addRun, addCheck, addDiff, addWhy, addSolids, addSchema, addNew, addCompletion])
