@@ -35,18 +35,21 @@ export function readStlAscii(bytes: Uint8Array): RawMesh {
       whole++;
       sink.add(corners[0]!, corners[1]!, corners[2]!);
     } else if (scanner.is('solid') || scanner.is('endsolid')) scanner.skipLine();
+    else if (scanner.atEnd) throw cutShort(facets, whole);
     else if (!scanner.is('outer') && !scanner.is('loop') && !scanner.is('endloop'))
       throw unexpected(scanner, `"${printable(scanner.word())}"`);
   }
-  if (open)
-    throw new MeshError(
-      'MESH_TRUNCATED',
-      `the file begins ${facets} triangles and ends within the last; ${whole} are whole.`,
-      'export or copy the file again',
-    );
+  if (open) throw cutShort(facets, whole);
   if (whole === 0) throw new MeshError('MESH_EMPTY', 'the file holds no triangles.');
   return sink.finish();
 }
+
+const cutShort = (facets: number, whole: number): MeshError =>
+  new MeshError(
+    'MESH_TRUNCATED',
+    `the file ends in the middle: it begins ${facets} triangles and ${whole} of them are whole.`,
+    'export or copy the file again',
+  );
 
 function readCorner(scanner: TextScanner, sink: TriangleSink): number {
   const x = readCoordinate(scanner);

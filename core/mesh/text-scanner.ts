@@ -40,6 +40,11 @@ export class TextScanner {
     return this.to > this.from;
   }
 
+  /** Whether nothing follows the last word. */
+  get atEnd(): boolean {
+    return this.to === this.bytes.length;
+  }
+
   skipLine(): void {
     const end = this.bytes.indexOf(NEWLINE, this.at);
     this.at = end < 0 ? this.bytes.length : end;

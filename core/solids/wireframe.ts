@@ -55,7 +55,16 @@ const closed = <T>(points: readonly T[]): T[] => [...points, points[0]!];
 /** Edges between two levels of the same outline. */
 function prism(outline: Outline, from: number, to: number): Polyline[] {
   const level = (z: number) => closed(outline.map(([x, y]): Vector3 => [x, y, z]));
-  return [level(from), level(to), ...outline.map(([x, y]): Polyline => [[x, y, from], [x, y, to]])];
+  return [
+    level(from),
+    level(to),
+    ...outline.map(
+      ([x, y]): Polyline => [
+        [x, y, from],
+        [x, y, to],
+      ],
+    ),
+  ];
 }
 
 const rectangle = (x: number, y: number): Outline => [
@@ -122,7 +131,12 @@ function halfRod(d: number, length: number): Polyline[] {
   return [
     level(-length / 2),
     level(length / 2),
-    ...edges.map(([x, y]): Polyline => [[x, y, -length / 2], [x, y, length / 2]]),
+    ...edges.map(
+      ([x, y]): Polyline => [
+        [x, y, -length / 2],
+        [x, y, length / 2],
+      ],
+    ),
   ];
 }
 
@@ -153,7 +167,12 @@ const paraboloidSide = (d: number, h: number): Outline =>
 
 const DRAWERS: Readonly<Record<string, Drawer>> = {
   particle: () => [],
-  rod: (d) => [[[0, 0, -number(d, 'length') / 2], [0, 0, number(d, 'length') / 2]]],
+  rod: (d) => [
+    [
+      [0, 0, -number(d, 'length') / 2],
+      [0, 0, number(d, 'length') / 2],
+    ],
+  ],
   box: (d) => {
     const [x, y, z] = list(d, 'size');
     return prism(rectangle(x!, y!), -z! / 2, z! / 2);
@@ -164,8 +183,7 @@ const DRAWERS: Readonly<Record<string, Drawer>> = {
     const inner = r - number(d, 'wall');
     return [...barrel(r, number(d, 'length')), ...(inner > 0 ? barrel(inner, number(d, 'length')) : [])];
   },
-  elliptical_cylinder: (d) =>
-    barrel(0.5, number(d, 'length'), list(d, 'size')[0]!, list(d, 'size')[1]!),
+  elliptical_cylinder: (d) => barrel(0.5, number(d, 'length'), list(d, 'size')[0]!, list(d, 'size')[1]!),
   half_cylinder: (d) => halfRod(number(d, 'diameter'), number(d, 'length')),
   sphere: (d) => globe(number(d, 'diameter')),
   hollow_sphere: (d) => globe(number(d, 'diameter')),
