@@ -6,6 +6,7 @@ import { writeGroups } from './groups-section.ts';
 import { writeIdentification, writeWaivers } from './identification.ts';
 import { createInk } from './ink.ts';
 import { type Baseline, writeLimits } from './limits-section.ts';
+import { writeMeshes } from './mesh-section.ts';
 import { writeParts } from './parts-section.ts';
 import { writePrincipal } from './principal-section.ts';
 import { writeOverrides, writeWarnings } from './remarks-section.ts';
@@ -80,6 +81,7 @@ function writeWhole(context: ReportContext, options: RunReportOptions): void {
   if (options.frame !== undefined) writeFrame(context, options.frame, record.frames[options.frame]);
   writeLimits(context, options.baseline);
   writeParts(context, options.parts ?? 'heaviest');
+  writeMeshes(context);
   writeGroups(context, 'By category', record.byCategory);
   writeGroups(context, 'By basis', record.byBasis);
 }

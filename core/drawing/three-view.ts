@@ -1,4 +1,11 @@
-import { formatFixed, formatShort, formatSignificant, plainText, unitText } from '../figures/index.ts';
+import {
+  decimalsFor,
+  formatFixed,
+  formatShort,
+  formatSignificant,
+  plainText,
+  unitText,
+} from '../figures/index.ts';
 import type { Vector3 } from '../linalg/vector3.ts';
 import { boxEdges, equivalentHalfLengths } from './equivalent-box.ts';
 import { type Box, boxAround, VIEWS, type View } from './view-axes.ts';
@@ -71,7 +78,7 @@ export function threeView(input: DrawingInput): string {
 <desc id="d">${markup(figures.join('. '))}</desc>
 <style>@page{size:landscape;margin:12mm}svg{background:${INK.paper}}text{fill:${INK.ink};font-size:14px}.soft{fill:${INK.soft};font-size:13px}.part{fill:none;stroke:${INK.ink};stroke-width:.9;stroke-linejoin:round}.cut{stroke:${INK.soft};stroke-dasharray:4 3}.box{fill:none;stroke:${INK.brass};stroke-width:.9;stroke-dasharray:7 4}.axis{stroke:${INK.brass};stroke-width:1.6}.allowed{fill:${INK.within};fill-opacity:.1;stroke:${INK.within};stroke-width:1.2}.frame{stroke:${INK.rule};stroke-width:1}</style>
 <rect width="100%" height="100%" fill="${INK.paper}"/>
-<text x="${SHEET.margin}" y="34" style="font-size:22px;font-weight:700">${markup(`${input.title}, ${input.state}`)}</text>
+<text x="${SHEET.margin}" y="34" style="font-size:22px;font-weight:700">${markup(clip(`${input.title}, ${input.state}`, 90))}</text>
 <text x="${SHEET.margin}" y="56" class="soft">${markup(conventionLine(input))}</text>
 <path d="M${SHEET.margin} 66H${SHEET.width - SHEET.margin}" stroke="${INK.ink}"/>
 ${views.join('\n')}
@@ -245,7 +252,9 @@ function legend(input: DrawingInput, { height }: Layout, figures: readonly strin
 function figureLines(input: DrawingInput): string[] {
   const { length, mass } = input.units;
   const say = (metres: number) => formatSignificant(metres / length.factor);
-  const centre = input.centre.map((c, k) => `${'xyz'[k]} ${say(c)}`).join(', ');
+  const shown = input.centre.map((c) => c / length.factor);
+  const decimals = decimalsFor(shown);
+  const centre = shown.map((c, k) => `${'xyz'[k]} ${formatFixed(c, decimals)}`).join(', ');
   const axes = input.principal.axes
     .map((axis, i) => `${i + 1} along [${axis.map((a) => formatFixed(a, 4)).join(', ')}]`)
     .join('; ');
