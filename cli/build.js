@@ -6,8 +6,33 @@ import { fileURLToPath } from 'node:url';
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '..');
 
+const SHAPE = 'core/document/assembly-shape.ts';
+
+/**
+ * Puts the table that a module computes from the schema in that module's place, so that reading a right file loads
+ * neither the schema nor its library.
+ */
+async function shapePlugin(bundle) {
+  const { outputFiles } = await bundle({
+    absWorkingDir: root,
+    entryPoints: [SHAPE],
+    bundle: true,
+    write: false,
+    format: 'esm',
+    platform: 'node',
+  });
+  const text = Buffer.from(outputFiles[0].contents).toString('base64');
+  const { assemblyShape } = await import(`data:text/javascript;base64,${text}`);
+  const contents = `export const assemblyShape = ${JSON.stringify(assemblyShape)};`;
+  return {
+    name: 'shape',
+    setup: ({ onLoad }) => onLoad({ filter: /[\\/]assembly-shape\.ts$/ }, () => ({ contents, loader: 'js' })),
+  };
+}
+
 export async function build() {
   const { build: bundle } = await import('esbuild');
+  const plugins = [await shapePlugin(bundle)];
   const { version } = JSON.parse(readFileSync(join(root, 'package.json'), 'utf8'));
   // Beside its place, and moved there when whole: a failed build leaves the command as it was.
   const outdir = mkdtempSync(join(root, '.dist-'));
@@ -28,6 +53,7 @@ export async function build() {
       js: "#!/usr/bin/env node\nimport{createRequire as __createRequire}from'node:module';const require=__createRequire(import.meta.url);",
     },
     logLevel: 'warning',
+    plugins,
   }).catch((error) => {
     rmSync(outdir, { recursive: true, force: true });
     throw error;

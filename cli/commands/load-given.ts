@@ -2,7 +2,7 @@ import { existsSync } from 'node:fs';
 import { InputError } from '#core/errors.ts';
 import { fromRows, type Symmetric3 } from '#core/linalg/symmetric3.ts';
 import type { Vector3 } from '#core/linalg/vector3.ts';
-import { loadProject } from '#core/model/load-project.ts';
+import { openProject } from '#core/model/open-project.ts';
 import type { ProjectSource } from '#core/model/source.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { type GivenTensor, givenTensor } from '#core/rollup/given-tensor.ts';
@@ -26,14 +26,15 @@ export async function loadGiven(
   request: RollUpRequest,
   context: Context,
 ): Promise<NamedTensor> {
-  if (text.trimStart().startsWith('{')) return { name: 'the tensor given', given: fromText(text, context) };
+  if (text.trimStart().startsWith('{'))
+    return { name: 'the tensor given', given: await fromText(text, context) };
   const at = text.lastIndexOf('#');
   const file = at > 0 && !existsSync(text) ? text.slice(0, at) : text;
   const path = file === text ? null : text.slice(at + 1);
   if (/\.(json|ndjson|jsonl)$/i.test(file) && existsSync(file))
     return { name: text, given: fromRecord(oneState(readRecordFile(file), request, file), path, text) };
   if (path !== null && existsSync(file)) {
-    const body = fromBody(file, path, request, context);
+    const body = await fromBody(file, path, request, context);
     if (body) return { name: text, given: body };
   }
   const { records } = await rollUpFile(file, request, context);
@@ -41,7 +42,7 @@ export async function loadGiven(
 }
 
 /** The body written out is read by the format's own reader, as the one part of an assembly in SI units. */
-function fromText(text: string, context: Context): GivenTensor {
+async function fromText(text: string, context: Context): Promise<GivenTensor> {
   const file = 'the tensor given';
   const yaml = `assembly: given\nproducts: negative\nparts:\n  - name: it\n    body: ${text.replace(/\r?\n/g, ' ')}\n`;
   const source: ProjectSource = {
@@ -50,13 +51,18 @@ function fromText(text: string, context: Context): GivenTensor {
     readBytes: () => ({ bytes: new Uint8Array(), sha256: '' }),
   };
   context.source = source;
-  return givenTensor(loadProject(file, source), 'it', 'nominal')!;
+  return givenTensor(await openProject(file, source), 'it', 'nominal')!;
 }
 
 /** A `body` of an assembly file, as its file writes it. */
-function fromBody(file: string, path: string, request: RollUpRequest, context: Context): GivenTensor | null {
+async function fromBody(
+  file: string,
+  path: string,
+  request: RollUpRequest,
+  context: Context,
+): Promise<GivenTensor | null> {
   const { source, path: inProject } = openFile(file, context);
-  const project = loadProject(inProject, source);
+  const project = await openProject(inProject, source);
   return givenTensor(project, path, request.states[0] ?? project.root.states[0]!.name);
 }
 

@@ -66,7 +66,7 @@ async function fromGit(
   const inside = path.startsWith('./') ? projectPath(root, resolve(path)) : path;
   const source = new GitSource(root, commit);
   context.source = source;
-  const { rolls } = rollUpSource(inside, source, request, context);
+  const { rolls } = await rollUpSource(inside, source, request, context);
   return recordsOf(rolls, { tool: 'steelyard', commit, at: new Date(0).toISOString() });
 }
 

@@ -1,7 +1,8 @@
 import { existsSync, realpathSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { InputError } from '#core/errors.ts';
-import { loadProject, type Project } from '#core/model/load-project.ts';
+import { openProject } from '#core/model/open-project.ts';
+import type { Project } from '#core/model/read-project.ts';
 import type { ProjectSource } from '#core/model/source.ts';
 import { buildRecord } from '#core/record/build-record.ts';
 import type { Provenance, RollUpRecord } from '#core/record/record.ts';
@@ -32,7 +33,7 @@ export async function rollUpFile(file: string, request: RollUpRequest, context: 
   const provenance = provenanceOf(source.root, context.io.env);
   // A rejection is reported by the await below; until then it must not count as unhandled.
   provenance.catch(() => undefined);
-  const { project, rolls } = rollUpSource(path, source, request, context);
+  const { project, rolls } = await rollUpSource(path, source, request, context);
   return { project, rolls, records: recordsOf(rolls, await provenance) };
 }
 
@@ -52,14 +53,14 @@ export function openFile(file: string, context: Context): { source: DiskSource; 
   return { source, path: projectPath(root, realpathSync(resolve(file))) };
 }
 
-export function rollUpSource(
+export async function rollUpSource(
   path: string,
   source: ProjectSource,
   request: RollUpRequest,
   context: Context,
-): { project: Project; rolls: RollUp[] } {
+): Promise<{ project: Project; rolls: RollUp[] }> {
   tell(context, `reading ${path}`);
-  const project = loadProject(path, source);
+  const project = await openProject(path, source);
   const set = setValues(project.root, request.set);
   const states = request.states.length > 0 ? request.states : project.root.states.map((s) => s.name);
   const meshes = new Map();

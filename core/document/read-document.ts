@@ -2,6 +2,7 @@ import { type Fault, FaultList } from '../errors.ts';
 import type { Places } from '../yaml/places.ts';
 import { readYaml } from '../yaml/read-yaml.ts';
 import type { PathStep, YamlMapping } from '../yaml/value.ts';
+import { assemblyShape } from './assembly-shape.ts';
 import { IssueFaults } from './issue-faults.ts';
 import { judgeDocument } from './judge-document.ts';
 import { prototypeKeyFaults } from './prototype-key.ts';
@@ -43,7 +44,7 @@ export function readDocument(text: string, file: string): DocumentRead {
 let isAssembly: ((value: unknown) => boolean) | undefined;
 
 function faultsOf(root: YamlMapping, places: Places, text: string): Fault[] {
-  isAssembly ??= quickCheck(assembly);
+  isAssembly ??= quickCheck(assemblyShape);
   const faults: Fault[] = [];
   const strange = text.includes('__proto__') || text.includes('\\') ? prototypeKeyFaults(root, places) : [];
   const torn = text.includes('(') ? findTorn(root) : [];

@@ -1,4 +1,4 @@
-import { type AssemblyDocument, readDocument } from '../document/index.ts';
+import type { AssemblyDocument, DocumentRead } from '../document/index.ts';
 import { FaultList } from '../errors.ts';
 import {
   ANGLE,
@@ -27,6 +27,9 @@ import { readSweeps } from './read-sweeps.ts';
 import type { TextInput } from './source.ts';
 import { type Where, within } from './where.ts';
 
+/** Text of a file → its document: `readDocument`, or `readRightDocument` for files that are right. */
+export type ReadDocument = (text: string, file: string) => DocumentRead;
+
 /**
  * Text of one assembly file → its model: names resolved, dimensions checked, expressions compiled.
  *
@@ -37,6 +40,7 @@ export function readFile(
   path: string,
   input: TextInput,
   include: (named: string, where: Where, reader: FileReader) => FileModel,
+  readDocument: ReadDocument,
 ): FileModel {
   const { document, places } = readDocument(input.text, path);
   const faults = new FaultList();

@@ -1,8 +1,8 @@
 import { FaultList, InputError } from '../errors.ts';
 import type { Symmetric3 } from '../linalg/symmetric3.ts';
 import type { Vector3 } from '../linalg/vector3.ts';
-import type { Project } from '../model/load-project.ts';
 import { findPart } from '../model/part-paths.ts';
+import type { Project } from '../model/read-project.ts';
 import { openScope } from './part-tree.ts';
 import { evaluate, evaluateVector, type Run } from './scope.ts';
 

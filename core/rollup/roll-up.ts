@@ -2,7 +2,7 @@ import { FaultList, InputError, type Warning } from '../errors.ts';
 import { type Moments, netMass } from '../inertia/balance-sum.ts';
 import type { Body } from '../inertia/body.ts';
 import { judgeBody } from '../inertia/possibility.ts';
-import type { Project } from '../model/load-project.ts';
+import type { Project } from '../model/read-project.ts';
 import { nearestName } from '../nearest-name.ts';
 import { sumAndClose } from './both-moments.ts';
 import { warnIfCutLeavesHost } from './cut-extent.ts';
