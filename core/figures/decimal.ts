@@ -11,12 +11,15 @@ export function decimalExponent(x: number): number {
 /** Significant digits of the largest figure of a column, where the caller asks for none. */
 export const DIGITS = 5;
 
-const DECIMALS_AT_MOST = 60;
+const DECIMALS_AT_MOST = 30;
 
 /** The one number of decimals with which a column shows its largest figure to `digits` significant digits. */
 export function decimalsFor(values: readonly number[], digits = DIGITS): number {
   const largest = Math.max(0, ...values.filter(Number.isFinite).map(Math.abs));
-  return Math.min(DECIMALS_AT_MOST, Math.max(0, digits - 1 - decimalExponent(largest)));
+  const exponent = decimalExponent(largest);
+  // What is smaller than any body prints as zero, not as a row of noughts.
+  if (exponent < -DECIMALS_AT_MOST) return digits - 1;
+  return Math.min(DECIMALS_AT_MOST, Math.max(0, digits - 1 - exponent));
 }
 
 /** A figure as an integer count of units of its last printed digit. |x| below 1e21. */
