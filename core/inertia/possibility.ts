@@ -36,8 +36,8 @@ export function judgeTensor(inertia: Symmetric3, allowance = 0): Possibility {
 }
 
 /** The same for a body that the core carries, whose Q is known without cancellation. */
-export function judgeBody(body: Body): Possibility {
-  return judgeSecondMoments(body.secondMoments, inertiaAboutCentre(body), 0);
+export function judgeBody(body: Body, allowance = 0): Possibility {
+  return judgeSecondMoments(body.secondMoments, inertiaAboutCentre(body), allowance);
 }
 
 function judgeSecondMoments(q: Symmetric3, inertia: Symmetric3, allowance: number): Possibility {

@@ -15,6 +15,8 @@ export function halfUnitOfLastDigit(text: string, field: Unit, value: number): n
   const decimals = match[1]!.split('.')[1]?.length ?? 0;
   const exponent = Number(match[2] ?? 0);
   const number = Number(`${match[1]}e${exponent}`);
+  // A bare 0 is the absence of the product, not a rounding to whole units.
+  if (number === 0 && decimals === 0) return 0;
   const step = Number(`5e${exponent - decimals - 1}`);
   if (match[3] === undefined) return step * field.factor;
   return number === 0 ? step * field.factor : step * Math.abs(value / number);

@@ -20,6 +20,8 @@ export interface OwnBody {
   readonly extent: Extent | null;
   /** Dimensions with twins resolved, for drawings. */
   readonly dimensions: SolidDimensions | null;
+  /** How far rounding in the digits given lets Q be from a body's [kg·m²]; absent where it needs none. */
+  readonly slack?: number;
   /** What was found in reading a mesh. */
   readonly mesh?: MeshReport;
 }
@@ -38,7 +40,7 @@ export function ownBody(part: PartModel, hostDensity: number | null, scope: Scop
   if (shape.kind === 'solid') return solidBody(part, shape, hostDensity, scope);
   if (shape.kind === 'mesh') return meshBody(part, shape, hostDensity, scope);
   if (shape.kind === 'body')
-    return { body: vendorBody(shape.body, part, scope), density: null, extent: null, dimensions: null };
+    return { ...vendorBody(shape.body, part, scope), density: null, extent: null, dimensions: null };
   return null;
 }
 

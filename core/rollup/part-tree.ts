@@ -118,6 +118,7 @@ function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scop
     own,
     members,
     factor,
+    slack: factor.basic * ((own?.slack ?? 0) + slackOf(members)),
     moments: part.cut ? onBoth(scaled, turnToCut) : scaled,
     overridden: override?.overridden ?? null,
   };
@@ -129,6 +130,13 @@ function ownMoments(body: Parameters<typeof scaleBody>[0], growth: number): Both
   const basic = { material: body, cut: null };
   return { basic, predicted: growth === 0 ? basic : { material: scaleBody(body, 1 + growth), cut: null } };
 }
+
+/** What rounding is granted to the bought items of some members together [kg·m²]. */
+export const slackOf = (members: readonly Member[]): number =>
+  members.reduce(
+    (sum, m) => sum + (m.kind === 'one' ? m.node.slack : m.copies.reduce((s, c) => s + c.node.slack, 0)),
+    0,
+  );
 
 /** An override scales the net of children and cuts to the new mass, the centre kept. */
 function overrideOf(part: PartModel, path: string, sum: Both<Moments>, growth: number, scope: Scope) {
@@ -160,7 +168,7 @@ function overrideOf(part: PartModel, path: string, sum: Both<Moments>, growth: n
 function judgeGroup(node: PartNode, path: string, moments: Moments, scope: Scope): void {
   const body = netBody(moments);
   if (!body) return;
-  const possibility = judgeBody(body);
+  const possibility = judgeBody(body, node.slack);
   if (possibility.possible) return;
   faultAt(scope, node.part.where, {
     code: 'ASSEMBLY_IMPOSSIBLE',

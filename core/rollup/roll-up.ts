@@ -6,7 +6,7 @@ import type { Project } from '../model/read-project.ts';
 import { nearestName } from '../nearest-name.ts';
 import { sumAndClose } from './both-moments.ts';
 import { warnIfCutLeavesHost } from './cut-extent.ts';
-import { membersOf, NOTHING_INHERITED, openScope } from './part-tree.ts';
+import { membersOf, NOTHING_INHERITED, openScope, slackOf } from './part-tree.ts';
 import { faultAt, type Run, type Scope } from './scope.ts';
 import { type Both, type Leaf, leavesOf, type Member, netBodies } from './tree.ts';
 import { impossible } from './vendor-body.ts';
@@ -67,7 +67,7 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
     run.faults.check();
   }
   const body = total as Both<Body>;
-  const possibility = judgeBody(body.basic);
+  const possibility = judgeBody(body.basic, slackOf(members));
   if (!possibility.possible)
     faultAt(scope, null, {
       code: 'ASSEMBLY_IMPOSSIBLE',

@@ -14,8 +14,10 @@ import { evaluate, evaluateVector, faultAt, type Scope } from './scope.ts';
  * A bought item's ten numbers in central form, from the maker's mass, centre and tensor about the declared point with
  * the declared sign of products. A tensor that no body can have is a fault when it fails by more than half a unit of the
  * digits given, a warning within that; the message names another reading that would be possible, and never applies it.
+ *
+ * @returns also the slack that rounding is granted: how far below zero an eigenvalue of Q is [kg·m²]
  */
-export function vendorBody(model: BodyModel, part: PartModel, scope: Scope): Body {
+export function vendorBody(model: BodyModel, part: PartModel, scope: Scope): { body: Body; slack: number } {
   const mass = massOf(model.mass, part, scope);
   const centre = model.centre ? evaluateVector(model.centre, scope) : ORIGIN;
   const inertia = tensorOf(model, scope);
@@ -23,18 +25,19 @@ export function vendorBody(model: BodyModel, part: PartModel, scope: Scope): Bod
   const about =
     declared === 'centre' ? centre : declared === 'origin' ? ORIGIN : evaluateVector(declared, scope);
   const central = about === centre ? inertia : moveToCentre(inertia, mass, subtract(centre, about));
-  judge(model, part, { mass, centre, inertia, about, central }, scope);
-  return { mass, centre, secondMoments: secondMomentsFromInertia(central) };
+  const slack = judge(model, part, { mass, centre, inertia, about, central }, scope);
+  return { body: { mass, centre, secondMoments: secondMomentsFromInertia(central) }, slack };
 }
 
 /** The six as the tensor's own elements (products negative). */
 function tensorOf(model: BodyModel, scope: Scope): Symmetric3 {
-  const { six, products, mirrored, halfUnits } = model.inertia;
+  const { six, products, mirrored } = model.inertia;
   const given = six.map((q) => evaluate(q, scope));
   mirrored?.forEach((quantity, i) => {
     const value = evaluate(quantity, scope);
     const above = given[3 + i]!;
-    if (Math.abs(value - above) <= 2 * halfUnits[3 + i]! + 4 * Number.EPSILON * Math.abs(above)) return;
+    // Printed twice, an element is printed alike.
+    if (Math.abs(value - above) <= 4 * Number.EPSILON * Math.abs(above)) return;
     const unit = unitFor(INERTIA, scope.file.units);
     faultAt(scope, quantity.where, {
       code: 'BODY_NOT_SYMMETRIC',
@@ -54,7 +57,7 @@ interface Reading {
   readonly central: Symmetric3;
 }
 
-function judge(model: BodyModel, part: PartModel, reading: Reading, scope: Scope): void {
+function judge(model: BodyModel, part: PartModel, reading: Reading, scope: Scope): number {
   const { halfUnits } = model.inertia;
   const exact = judgeTensor(reading.central);
   if (!exact.possible) {
@@ -62,7 +65,7 @@ function judge(model: BodyModel, part: PartModel, reading: Reading, scope: Scope
     const message = impossible(`${scope.prefix}${part.name}`, exact, scope);
     if (judgeTensor(reading.central, allowance).possible) {
       warn(part, scope, 'BODY_IMPOSSIBLE_BY_ROUNDING', `${message}; within half a unit of the digits given`);
-      return;
+      return exact.shortfall / 2;
     }
     const readings = possibleReadings({ ...reading, allowance });
     faultAt(scope, model.inertia.where, {
@@ -73,10 +76,11 @@ function judge(model: BodyModel, part: PartModel, reading: Reading, scope: Scope
           ? `it would be possible ${readings.join(', or ')}; ask the maker which was meant and declare it`
           : 'no other sign, reference point or order of the elements makes it possible: check the digits and the unit',
     });
-    return;
+    return 0;
   }
   warnIfPlaceholder(part, reading, scope);
   warnIfTooSmall(part, reading, scope);
+  return 0;
 }
 
 /** How far rounding in the digits can push an eigenvalue of Q: ½ Σ δᵢᵢ and the Frobenius norm of the products'. */
