@@ -32,6 +32,11 @@ export class FileReader {
     this.faults.add({ ...fault, at: this.places.placeOf(pathOf(where)) });
   }
 
+  /** A fault of a key itself, not of what it holds. */
+  keyFault(where: Where, fault: Omit<Fault, 'at'>): void {
+    this.faults.add({ ...fault, ...this.places.markOfKey(pathOf(where)) });
+  }
+
   /** The unit a bare number of some kind takes in this file. */
   unitOf(kind: Dimension): Unit {
     return unitFor(kind, this.units);

@@ -78,7 +78,7 @@ export const boundQuantity = (reader: FileReader, text: string, like: Quantity, 
 
 function checkName(name: string, reader: FileReader, where: Where): boolean {
   if (isParameterName(name) && !isReservedName(name)) return true;
-  reader.fault(where, {
+  reader.keyFault(where, {
     code: 'PARAMETER_NAME',
     message: isParameterName(name)
       ? `expected a parameter name of your own, found '${name}', which is a unit, a function or a quantity`

@@ -79,7 +79,11 @@ function readInclude(part: PartDocument, context: PartContext, where: Where): Sh
     if (symbol) {
       const like = file.parameters[symbol.slot]!.value;
       values.set(symbol.slot, boundQuantity(reader, text, like, at));
-    } else unknownName(reader, at, 'parameter', name, file.slots.keys(), ` of ${file.path}`);
+    } else
+      unknownName(reader, at, 'parameter', name, file.slots.keys(), {
+        whose: ` of ${file.path}`,
+        isKey: true,
+      });
   }
   const state = part.state === undefined ? null : readIncludeState(part.state, file, context, where);
   return { kind: 'include', file, with: values, state, where: within(where, 'include') };
@@ -94,7 +98,8 @@ function readIncludeState(
   const at = within(where, 'state');
   const theirs = file.states.map((s) => s.name);
   const check = (name: string, place: Where) => {
-    if (!theirs.includes(name)) unknownName(context.reader, place, 'state', name, theirs, ` of ${file.path}`);
+    if (!theirs.includes(name))
+      unknownName(context.reader, place, 'state', name, theirs, { whose: ` of ${file.path}` });
     return name;
   };
   if (typeof given === 'string') return check(given, at);
@@ -114,7 +119,9 @@ function knownStates(
 ): readonly string[] {
   names.forEach((name, i) => {
     if (!context.states.includes(name))
-      unknownName(context.reader, within(where, keyed ? name : i), 'state', name, context.states);
+      unknownName(context.reader, within(where, keyed ? name : i), 'state', name, context.states, {
+        isKey: keyed,
+      });
   });
   return names;
 }
@@ -126,11 +133,12 @@ export function unknownName(
   kind: 'state' | 'material' | 'parameter' | 'frame' | 'part' | 'maturity' | 'quantity',
   name: string,
   known: Iterable<string>,
-  whose = '',
+  { whose = '', isKey = false }: { whose?: string; isKey?: boolean } = {},
 ): void {
   const names = [...known];
   const nearest = nearestName(name, names);
-  reader.fault(where, {
+  const report = isKey ? reader.keyFault : reader.fault;
+  report.call(reader, where, {
     code: `MODEL_UNKNOWN_${kind.toUpperCase()}`,
     message: `expected a ${kind}${whose}, found '${name}', which is not one`,
     hint: nearest

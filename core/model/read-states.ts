@@ -21,7 +21,7 @@ export function readStates(
     for (const [parameter, text] of Object.entries(state.parameters ?? {})) {
       const at = within(within(where, 'parameters'), parameter);
       const symbol = parameterNamed(parameters.slots, parameter);
-      if (!symbol) unknownName(reader, at, 'parameter', parameter, parameters.slots.keys());
+      if (!symbol) unknownName(reader, at, 'parameter', parameter, parameters.slots.keys(), { isKey: true });
       else values.set(symbol.slot, boundQuantity(reader, text, parameters.list[symbol.slot]!.value, at));
     }
     checkCircle(parameters.list, values, reader, where);

@@ -43,7 +43,7 @@ export function readSweeps(
         const at = within(within(where, 'vary'), parameter);
         const symbol = parameterNamed(parameters.slots, parameter);
         if (!symbol) {
-          unknownName(reader, at, 'parameter', parameter, parameters.slots.keys());
+          unknownName(reader, at, 'parameter', parameter, parameters.slots.keys(), { isKey: true });
           return [];
         }
         const like = parameters.list[symbol.slot]!.value;
