@@ -155,7 +155,7 @@ const files = (names: readonly string[]) =>
   Object.fromEntries(names.map((name) => [`${name}.stl`, new Uint8Array(file(name))]));
 
 describe('the STL files of Debian’s occt-misc', () => {
-  it.each(CLOSED)(
+  it.for(CLOSED)(
     '%s: volume, centre and tensor agree with the divergence theorem',
     (name, context?: unknown) => {
       if (!stl) return (context as { skip(why: string): void } | undefined)?.skip(missing);
@@ -208,8 +208,8 @@ describe('the STL files of Debian’s occt-misc', () => {
     }
   });
 
-  it.each(OPEN)('%s is refused as open, with as many edges as there are', (name, context?: unknown) => {
-    if (!stl) return (context as { skip(why: string): void } | undefined)?.skip(missing);
+  it.for(OPEN)('%s is refused as open, with as many edges as there are', (name, context) => {
+    if (!stl) return context.skip(missing);
     const [fault] = faultsOf(`assembly: a\nparts:\n${part(name)}`, { files: files([name]) });
     expect(fault!.code).toBe('MESH_OPEN');
     expect(fault!.at).toMatchObject({ file: 'top.yaml', line: 3 });
