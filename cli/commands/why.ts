@@ -24,7 +24,7 @@ export function addWhy(program: Command, context: Context): void {
 A side is
   run.json, run.json#receiver           a record, or one part of it
   drone.yaml, drone.yaml#receiver       an assembly, or a body as its file says
-  "{ mass: 38.5 g, centre: [ 12 mm, 0, 3 mm ], inertia: { xx: …, about: centre } }"
+  "{ mass: 38.5 g, centre: [ 12 mm, 0, 0 ], inertia: { xx: …, about: origin } }"
                                         a body written out, as in the file format
 Tried: sign of products, reference point, 24 axis turns and their mirror images,
 a rotation transposed or left out, units, order of the elements.`,

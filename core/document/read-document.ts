@@ -85,11 +85,12 @@ function isSamePath(a: readonly PathStep[], b: readonly PathStep[]): boolean {
   return a.length === b.length && a.every((step, i) => step === b[i]);
 }
 
-/** Faults by line and column; of several with one code at one place, the first. */
+/** Faults by line and column; a value's shape is blamed once, and nothing is said twice. */
 function inTextOrder(faults: readonly Fault[]): Fault[] {
   const seen = new Set<string>();
   return [...faults].sort(byPlace).filter((fault) => {
-    const key = `${fault.code} ${fault.at?.line}:${fault.at?.column} ${fault.message}`;
+    const words = fault.code === 'MODEL_WRONG_SHAPE' ? '' : fault.message;
+    const key = `${fault.code} ${fault.at?.line}:${fault.at?.column} ${words}`;
     return !seen.has(key) && seen.add(key);
   });
 }

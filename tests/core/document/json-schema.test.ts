@@ -20,7 +20,7 @@ describe('assemblyJsonSchema', () => {
 
   it('describes every key of the file and of a part', () => {
     for (const [key, value] of [...Object.entries(schema.properties!), ...Object.entries(part)]) {
-      expect(value.description, key).toBeTruthy();
+      expect((value as { description?: string }).description, key).toBeTruthy();
     }
   });
 

@@ -155,7 +155,7 @@ describe('readDocument', () => {
         }),
         (edits) => {
           const data = parse(SWEEP, { schema: 'failsafe' });
-          for (const [steps, value, key] of edits) replaceAt(data, steps, value, key);
+          for (const [steps, value, key] of edits) replaceAt(data, steps, structuredClone(value), key);
           readOrRefuse(
             stringify(data, {
               schema: 'failsafe',
@@ -177,7 +177,7 @@ describe('quickCheck', () => {
         fc.array(fc.tuple(way, strange, fc.option(keyName, { nil: undefined })), { maxLength: 2 }),
         (edits) => {
           const data = parse(SWEEP, { schema: 'failsafe' });
-          for (const [steps, value, key] of edits) replaceAt(data, steps, value, key);
+          for (const [steps, value, key] of edits) replaceAt(data, steps, structuredClone(value), key);
           expect(isAssembly(data)).toBe(assembly.safeParse(data).success);
         },
       ),
