@@ -25,7 +25,7 @@ A side is
   run.json, run.json#receiver           a record, or one part of it
   drone.yaml, drone.yaml#receiver       an assembly, or a body as its file says
   "{ mass: 38.5 g, centre: [ 12 mm, 0, 0 ], inertia: { xx: …, about: origin } }"
-                                        a body written out, as in the file format
+                                        a body written out, as in a file
 Tried: sign of products, reference point, 24 axis turns and their mirror images,
 a rotation transposed or left out, units, order of the elements.`,
     )

@@ -200,6 +200,7 @@ describe('steelyard new, schema, solids, completion', () => {
       'bash',
       [
         '-c',
+        // biome-ignore lint/suspicious/noTemplateCurlyInString: the shell's own braces
         'source ./script; COMP_WORDS=(steelyard ch); COMP_CWORD=1; _steelyard; echo "${COMPREPLY[@]}"; COMP_WORDS=(steelyard run --thr); COMP_CWORD=2; _steelyard; echo "${COMPREPLY[@]}"',
       ],
       { cwd: test.folder },
