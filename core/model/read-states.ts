@@ -79,23 +79,26 @@ export function findCircle(
   quantityOf: (slot: number) => Quantity,
 ): string[] | null {
   const done = new Set<number>();
-  const trail: number[] = [];
-  const visit = (slot: number): number[] | null => {
-    if (done.has(slot)) return null;
-    const at = trail.indexOf(slot);
-    if (at >= 0) return [...trail.slice(at), slot];
-    trail.push(slot);
-    for (const read of quantityOf(slot).expression.reads) {
-      const circle = visit(read);
-      if (circle) return circle;
+  for (const first of list.keys()) {
+    // The way from the first to the one in hand, and how many of its reads are looked at: no recursion, for a chain may
+    // be longer than the engine's stack.
+    const trail: { slot: number; next: number }[] = [{ slot: first, next: 0 }];
+    const open = new Set([first]);
+    while (trail.length > 0) {
+      const here = trail.at(-1)!;
+      const read = done.has(here.slot) ? undefined : quantityOf(here.slot).expression.reads[here.next++];
+      if (read === undefined) {
+        done.add(here.slot);
+        open.delete(here.slot);
+        trail.pop();
+      } else if (open.has(read)) {
+        const circle = trail.slice(trail.findIndex((t) => t.slot === read)).map((t) => t.slot);
+        return [...circle, read].map((slot) => list[slot]!.name);
+      } else if (!done.has(read)) {
+        open.add(read);
+        trail.push({ slot: read, next: 0 });
+      }
     }
-    trail.pop();
-    done.add(slot);
-    return null;
-  };
-  for (const slot of list.keys()) {
-    const circle = visit(slot);
-    if (circle) return circle.map((s) => list[s]!.name);
   }
   return null;
 }

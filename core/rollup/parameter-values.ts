@@ -11,19 +11,26 @@ export type SetValues = ReadonlyMap<number, number>;
 export function fillParameters(scope: Scope, set: SetValues): void {
   const { file, state, values } = scope;
   const done = new Uint8Array(file.parameters.length);
-  const fill = (slot: number): void => {
-    if (done[slot]) return;
-    done[slot] = 1;
-    const given = set.get(slot);
-    if (given !== undefined) {
-      values[slot] = given;
-      return;
+  // A stack of its own, for a chain of parameters may be longer than the engine's.
+  const waiting: number[] = [];
+  for (const first of file.parameters.keys()) {
+    waiting.push(first);
+    while (waiting.length > 0) {
+      const slot = waiting.at(-1)!;
+      const given = set.get(slot);
+      const quantity = valueIn(file, state, slot);
+      const missing =
+        done[slot] || given !== undefined ? [] : quantity.expression.reads.filter((read) => !done[read]);
+      if (missing.length > 0) {
+        waiting.push(...missing);
+        continue;
+      }
+      waiting.pop();
+      if (done[slot]) continue;
+      values[slot] = given ?? evaluate(quantity, scope);
+      done[slot] = 1;
     }
-    const quantity = valueIn(file, state, slot);
-    for (const read of quantity.expression.reads) fill(read);
-    values[slot] = evaluate(quantity, scope);
-  };
-  for (const slot of file.parameters.keys()) fill(slot);
+  }
   for (const slot of file.parameters.keys()) checkBounds(scope, slot);
 }
 

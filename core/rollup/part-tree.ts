@@ -3,7 +3,7 @@ import { scaleBody } from '../inertia/body.ts';
 import { compose } from '../inertia/placement.ts';
 import { judgeBody } from '../inertia/possibility.ts';
 import type { FileModel, PartModel } from '../model/model.ts';
-import { within } from '../model/where.ts';
+import { type Where, within } from '../model/where.ts';
 import { formatQuantity, MASS, unitFor } from '../units/index.ts';
 import { onBoth, placeMoments, scaleMoments, sumAndClose, turnToCut } from './both-moments.ts';
 import { copiesOf } from './copies.ts';
@@ -118,6 +118,7 @@ function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scop
     own,
     members,
     factor,
+    leaves: leavesIn(part, path, own !== null, members, scope),
     slack: factor.basic * ((own?.slack ?? 0) + slackOf(members)),
     moments: part.cut ? onBoth(scaled, turnToCut) : scaled,
     overridden: override?.overridden ?? null,
@@ -129,6 +130,46 @@ function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scop
 function ownMoments(body: Parameters<typeof scaleBody>[0], growth: number): Both<Moments> {
   const basic = { material: body, cut: null };
   return { basic, predicted: growth === 0 ? basic : { material: scaleBody(body, 1 + growth), cut: null } };
+}
+
+/** More parts than this, copies and includes counted, are a slip or a bomb, not a machine. */
+const LEAVES_AT_MOST = 100_000;
+
+function leavesIn(
+  part: PartModel,
+  path: string,
+  hasOwn: boolean,
+  members: readonly Member[],
+  scope: Scope,
+): number {
+  const leaves = Number(hasOwn) + sumOf(members, leavesOf);
+  refuseTooMany(part.where, path, leaves, scope);
+  return leaves;
+}
+
+const leavesOf = (member: Member): number =>
+  member.kind === 'one' ? member.node.leaves : member.copies.length * (member.copies[0]?.node.leaves ?? 0);
+
+const sumOf = (members: readonly Member[], of: (member: Member) => number) =>
+  members.reduce((sum, member) => sum + of(member), 0);
+
+/** Checks what stands at the top of a file as well, before anything walks every leaf; blames the largest. */
+export function refuseTooManyAtTop(members: readonly Member[], scope: Scope): void {
+  const leaves = sumOf(members, leavesOf);
+  if (leaves <= LEAVES_AT_MOST) return;
+  const largest = members.reduce((a, b) => (leavesOf(b) > leavesOf(a) ? b : a));
+  const node = largest.kind === 'one' ? largest.node : largest.copies[0]!.node;
+  refuseTooMany(node.part.where, largest.name, leaves, scope);
+}
+
+function refuseTooMany(where: Where, path: string, leaves: number, scope: Scope): void {
+  if (leaves <= LEAVES_AT_MOST) return;
+  faultAt(scope, where, {
+    code: 'ASSEMBLY_TOO_LARGE',
+    message: `expected at most ${LEAVES_AT_MOST} parts, copies and includes counted, found ${leaves}, most of them in '${path}'`,
+    hint: 'look for repeats inside repeats and files that include one another twice at every level; give what is alike as one body',
+  });
+  scope.run.faults.check();
 }
 
 /** What rounding is granted to the bought items of some members together [kg·m²]. */

@@ -6,7 +6,7 @@ import type { Project } from '../model/read-project.ts';
 import { nearestName } from '../nearest-name.ts';
 import { sumAndClose } from './both-moments.ts';
 import { warnIfCutLeavesHost } from './cut-extent.ts';
-import { membersOf, NOTHING_INHERITED, openScope, slackOf } from './part-tree.ts';
+import { membersOf, NOTHING_INHERITED, openScope, refuseTooManyAtTop, slackOf } from './part-tree.ts';
 import { faultAt, type Run, type Scope } from './scope.ts';
 import { type Both, type Leaf, leavesOf, type Member, netBodies } from './tree.ts';
 import { impossible } from './vendor-body.ts';
@@ -55,6 +55,7 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
   run.faults.check();
   const members = membersOf(root.parts, '', NOTHING_INHERITED, scope);
   run.faults.check();
+  refuseTooManyAtTop(members, scope);
   warnIfCutLeavesHost(null, members, scope);
   const moments = members.length > 0 ? sumAndClose(members.map((m) => m.moments)) : EMPTY;
   const total = netBodies(moments);

@@ -29,6 +29,8 @@ export interface PartNode {
   readonly factor: Both<number>;
   /** Own and members, closed, override applied and cut-outs turned to cuts; in the node's own axes. */
   readonly moments: Both<Moments>;
+  /** Solids and bodies in it, every copy counted. */
+  readonly leaves: number;
   /** Sum of what rounding is granted to bought items inside, for judging what is computed from them [kg·m²]. */
   readonly slack: number;
   /** What the override replaced [kg], basic. */
