@@ -81,11 +81,22 @@ function applySharedOptions(context: Context, action: Command): void {
   }
 }
 
+/** The engine holds no text of more than half a gigabyte. */
+const TOO_MUCH_OUTPUT: Fault = {
+  code: 'OUTPUT_TOO_LARGE',
+  message: 'expected output of at most half a gigabyte of text, found that these records need more',
+  hint: 'ask for one state at a time with --state, or for one part with --of',
+};
+
 function statusOf(error: unknown, context: Context): ExitStatus {
   const { io } = context;
   if (error instanceof CommanderError) return error.exitCode === 0 ? EXIT.fine : EXIT.wrong;
   if (error instanceof InputError) {
     reportFaults(error.faults, context);
+    return EXIT.wrong;
+  }
+  if (error instanceof RangeError && /string length/.test(error.message)) {
+    reportFaults([TOO_MUCH_OUTPUT], context);
     return EXIT.wrong;
   }
   const message = error instanceof Error ? error.message : String(error);
