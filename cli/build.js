@@ -1,6 +1,6 @@
-// Bundles the command into dist/: one entry and chunks that load only when a command needs them.
+// Bundles the command into dist/cli/: one entry and chunks that load only when a command needs them.
 // Run by `npm run build`, by `npm ci` through `prepare`, and by the first `npm start`.
-import { chmodSync, mkdtempSync, readFileSync, renameSync, rmSync } from 'node:fs';
+import { chmodSync, mkdirSync, mkdtempSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
@@ -36,7 +36,8 @@ export async function build() {
   const { version } = JSON.parse(readFileSync(join(root, 'package.json'), 'utf8'));
   // Beside its place, and moved there when whole: a failed build leaves the command as it was.
   const outdir = mkdtempSync(join(root, '.dist-'));
-  const dist = join(root, 'dist');
+  const dist = join(root, 'dist', 'cli');
+  mkdirSync(join(root, 'dist'), { recursive: true });
   await bundle({
     absWorkingDir: root,
     entryPoints: { steelyard: 'cli/main.ts' },

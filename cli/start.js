@@ -6,7 +6,7 @@ import { fileURLToPath } from 'node:url';
 import { build } from './build.js';
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '..');
-const command = join(root, 'dist', 'steelyard.js');
+const command = join(root, 'dist', 'cli', 'steelyard.js');
 const demo = 'examples/survey-drone/drone.yaml';
 
 if (!existsSync(command)) await build();

@@ -7,7 +7,7 @@ import { load } from 'js-yaml';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '..');
-const command = join(root, 'dist', 'steelyard.js');
+const command = join(root, 'dist', 'cli', 'steelyard.js');
 
 /** A project of its own in git, with the examples as a user would have them. */
 let project: string;

@@ -9,7 +9,7 @@ import { measure, median, type Sample } from './measure.ts';
 
 const root = join(import.meta.dirname, '..', '..');
 const folder = mkdtempSync(join(tmpdir(), 'steelyard-bench-'));
-const cli = join(root, 'dist', 'steelyard.js');
+const cli = join(root, 'dist', 'cli', 'steelyard.js');
 const runs = Number(process.env.BENCH_RUNS ?? 7);
 
 interface Row {

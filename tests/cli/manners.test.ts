@@ -5,7 +5,7 @@ import { execa, execaNode } from 'execa';
 import { describe, expect, it } from 'vitest';
 import { CliTest } from '../helpers/cli-test.ts';
 
-const COMMAND = join(import.meta.dirname, '..', '..', 'dist', 'steelyard.js');
+const COMMAND = join(import.meta.dirname, '..', '..', 'dist', 'cli', 'steelyard.js');
 const ONE = 'assembly: one\nparts: [ { name: p, solid: particle, mass: 1 } ]\n';
 
 /** Nothing that a user sees may look like a crash. */

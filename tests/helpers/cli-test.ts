@@ -4,7 +4,7 @@ import { dirname, join } from 'node:path';
 import { execa } from 'execa';
 import { onTestFinished } from 'vitest';
 
-const COMMAND = join(import.meta.dirname, '..', '..', 'dist', 'steelyard.js');
+const COMMAND = join(import.meta.dirname, '..', '..', 'dist', 'cli', 'steelyard.js');
 
 /** What a command did: its streams as it wrote them, and its exit status. */
 export interface Outcome {
