@@ -2,11 +2,11 @@ import { FAULTS_AT_MOST, type Fault, InputError } from '#core/errors.ts';
 import { displayUnits, plainText } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { type PartSelection, selectPart } from '#core/record/select-part.ts';
+import { isBroken } from '#core/record/waiver-state.ts';
 import { TextError } from '#core/units/index.ts';
 import { EXIT } from '../exit-status.ts';
 import { writeWhole } from '../io.ts';
 import { annotationsOfFaults, annotationsOfRecords, formatAnnotations } from '../output/ci-annotations.ts';
-import { isBroken } from '../output/waiver-state.ts';
 import { ciState } from '../project/ci.ts';
 import type { Context } from './context.ts';
 import { dayOf, formatOfFile } from './options.ts';
@@ -124,7 +124,7 @@ function annotate(annotations: Parameters<typeof formatAnnotations>[0], context:
 }
 
 async function drawThreeViews(runs: readonly FileRun[], file: string, context: Context): Promise<void> {
-  const { drawRoll } = await import('./draw-roll.ts');
+  const { drawRoll } = await import('#core/drawing/draw-roll.ts');
   const drawings = runs.flatMap((run) => run.rolls.map((roll, i) => ({ roll, record: run.records[i]! })));
   for (const { roll, record } of drawings) {
     const path = drawings.length === 1 ? file : withName(file, `${record.assembly}-${record.state}`);

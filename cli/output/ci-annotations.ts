@@ -1,8 +1,8 @@
+import { isBroken, waiverState } from '#core/record/waiver-state.ts';
 import type { Fault } from '../../core/errors.ts';
 import { plainText } from '../../core/figures/index.ts';
 import type { RollUpRecord } from '../../core/record/record.ts';
 import { failureText } from './formats/junit.ts';
-import { isBroken, waiverState } from './waiver-state.ts';
 
 /** Something a build server can show at a line of a file. */
 export interface Annotation {

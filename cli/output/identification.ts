@@ -1,6 +1,6 @@
+import { isBroken, waiverState } from '#core/record/waiver-state.ts';
 import type { Conventions, Provenance, RollUpRecord } from '../../core/record/record.ts';
 import { place, productsText, type ReportContext } from './report-context.ts';
-import { isBroken, waiverState } from './waiver-state.ts';
 
 /** Whose figures these are, from which text, in which axes, units and signs. */
 export function writeIdentification({ record, sheet, units, products, today }: ReportContext): void {

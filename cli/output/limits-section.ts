@@ -1,3 +1,4 @@
+import { waiverState } from '#core/record/waiver-state.ts';
 import {
   beamOf,
   formatSignificant,
@@ -9,7 +10,6 @@ import type { LimitResult } from '../../core/record/record.ts';
 import { place, type ReportContext } from './report-context.ts';
 import { drawBeam, labelWidth } from './terminal-beam.ts';
 import { padEnd, padStart, textWidth } from './text-width.ts';
-import { waiverState } from './waiver-state.ts';
 
 /** Baseline values of one-sided limits by name [SI], where the fulcrum stands. */
 export type Baseline = Readonly<Record<string, number>>;

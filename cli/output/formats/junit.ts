@@ -1,3 +1,4 @@
+import { isBroken, waiverState } from '#core/record/waiver-state.ts';
 import {
   displayUnits,
   formatSignificant,
@@ -7,7 +8,6 @@ import {
 } from '../../../core/figures/index.ts';
 import type { LimitResult, RollUpRecord } from '../../../core/record/record.ts';
 import { place } from '../report-context.ts';
-import { isBroken, waiverState } from '../waiver-state.ts';
 
 /** A suite a state, a case a limit: what build servers read. A waived limit counts as skipped, with its reason. */
 export function formatJunit(

@@ -1,3 +1,4 @@
+import { isBroken, waiverState } from '#core/record/waiver-state.ts';
 import {
   decimalsFor,
   displayUnits,
@@ -20,7 +21,6 @@ import type { RollUpRecord } from '../../../core/record/record.ts';
 import { axesText, CAUTION, sourceText, verdictText } from '../identification.ts';
 import { chooseParts } from '../parts-section.ts';
 import { place, productsText } from '../report-context.ts';
-import { isBroken, waiverState } from '../waiver-state.ts';
 import { failureText } from './junit.ts';
 
 export interface MarkdownOptions {

@@ -1,14 +1,14 @@
-import { boxEdges, equivalentHalfLengths } from '#core/drawing/equivalent-box.ts';
-import { type DrawnPart, threeView } from '#core/drawing/three-view.ts';
-import { displayUnits } from '#core/figures/index.ts';
-import { placePoint } from '#core/inertia/placement.ts';
-import { principalAxes } from '#core/inertia/principal-axes.ts';
-import type { Vector3 } from '#core/linalg/vector3.ts';
-import type { RollUpRecord } from '#core/record/record.ts';
-import { leafBody } from '#core/rollup/leaf-body.ts';
-import type { RollUp } from '#core/rollup/roll-up.ts';
-import type { Leaf } from '#core/rollup/tree.ts';
-import { wireframe } from '#core/solids/index.ts';
+import { displayUnits } from '../figures/index.ts';
+import { placePoint } from '../inertia/placement.ts';
+import { principalAxes } from '../inertia/principal-axes.ts';
+import type { Vector3 } from '../linalg/vector3.ts';
+import type { RollUpRecord } from '../record/record.ts';
+import { leafBody } from '../rollup/leaf-body.ts';
+import type { RollUp } from '../rollup/roll-up.ts';
+import type { Leaf } from '../rollup/tree.ts';
+import { wireframe } from '../solids/index.ts';
+import { boxEdges, equivalentHalfLengths } from './equivalent-box.ts';
+import { type DrawnPart, threeView } from './three-view.ts';
 
 /** More outlines than this make a blot, not a drawing. */
 const DRAWN_AT_MOST = 1500;

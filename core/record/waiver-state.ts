@@ -1,4 +1,4 @@
-import type { LimitResult } from '../../core/record/record.ts';
+import type { LimitResult } from './record.ts';
 
 /** A waiver counts to the end of its day, and only where its limit is broken. */
 export function waiverState(
