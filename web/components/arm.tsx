@@ -1,0 +1,77 @@
+import { type RefObject, useLayoutEffect, useRef, useState } from 'react';
+
+/** Where the poise hangs and how the arm is cut, in pixels from the masthead's left end. */
+interface Measure {
+  readonly width: number;
+  readonly fulcrum: number;
+  readonly poise: number | null;
+}
+
+const HEAVY_END = 150;
+const NARROW = 720;
+
+/** The masthead's arm: short and heavy left of its fulcrum, notched and tapering to the right, the poise where you are. */
+export function Arm({ masthead, here }: { masthead: RefObject<HTMLElement | null>; here: string }) {
+  const [measure, setMeasure] = useState<Measure | null>(null);
+  const first = useRef(true);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: another place moves the poise.
+  useLayoutEffect(() => {
+    const element = masthead.current;
+    if (!element) return;
+    const look = () => setMeasure(measureOf(element));
+    look();
+    const observer = new ResizeObserver(look);
+    observer.observe(element);
+    let gone = false;
+    void document.fonts?.ready.then(() => gone || look());
+    return () => {
+      gone = true;
+      observer.disconnect();
+    };
+  }, [here, masthead]);
+  useLayoutEffect(() => {
+    if (measure?.poise !== null && measure) requestAnimationFrame(() => (first.current = false));
+  }, [measure]);
+  if (!measure) return <svg className="arm" aria-hidden="true" />;
+  const { width, fulcrum, poise } = measure;
+  const heavy = width < NARROW ? 2 * fulcrum : HEAVY_END;
+  return (
+    <svg className="arm" aria-hidden="true">
+      <path d={`M0 0H${width}V2.4L${heavy} 4.4H0z`} fill="var(--color-ink)" />
+      <path d={notches(heavy + 12, width)} stroke="var(--color-paper)" strokeWidth="1.1" fill="none" />
+      <path d={`M${fulcrum} 5l-8 14h16z`} fill="none" stroke="var(--color-ink)" strokeWidth="1.4" />
+      {poise !== null && (
+        <g
+          className="poise"
+          data-first={first.current ? '' : undefined}
+          style={{ transform: `translateX(${poise}px)` }}
+        >
+          <path d="M-4 0a4 4 0 1 1 8 0v3M0 4v8" stroke="var(--color-brass)" strokeWidth="2" fill="none" />
+          <path
+            d="M-7 12h14l5 17h-24z"
+            fill="var(--color-brass-fill)"
+            stroke="var(--color-ink)"
+            strokeWidth="1.2"
+          />
+        </g>
+      )}
+    </svg>
+  );
+}
+
+function measureOf(masthead: HTMLElement): Measure {
+  const box = masthead.getBoundingClientRect();
+  const here = masthead.querySelector('[data-here]')?.getBoundingClientRect();
+  return {
+    width: box.width,
+    fulcrum: box.width < NARROW ? 12 : 64,
+    poise: here ? Math.round(here.left + here.width / 2 - box.left) : null,
+  };
+}
+
+/** Notches that widen away from the fulcrum. */
+function notches(from: number, to: number): string {
+  let path = '';
+  for (let at = from, step = 7; at < to - 10; at += step, step += 0.22) path += `M${at - 2} 1.2l2 3 2-3`;
+  return path;
+}

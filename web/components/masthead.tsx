@@ -1,0 +1,80 @@
+import { useRef } from 'react';
+import { Link, useLocation, useParams } from 'react-router-dom';
+import type { Session } from '#core/api/people.ts';
+import { useProjects } from '#web/api/projects.ts';
+import { lastProject } from '#web/lib/last-project.ts';
+import { linkTo, PATHS } from '#web/paths.ts';
+import { AccountMenu } from './account-menu.tsx';
+import { Arm } from './arm.tsx';
+import { ProjectChooser } from './project-chooser.tsx';
+
+/** The name, where one can go, who is signed in; all standing on the arm of a steelyard. */
+export function Masthead({ session }: { session: Session | undefined }) {
+  const masthead = useRef<HTMLElement>(null);
+  const { pathname } = useLocation();
+  const person = session?.person ?? null;
+  const projects = useProjects(person !== null).data ?? [];
+  const wanted = useParams().project ?? lastProject();
+  const project = projects.find(({ slug }) => slug === wanted) ?? projects[0];
+  const places = person ? placesOf(project?.slug, person.administrator) : [];
+  const here = places.find(({ is }) => is(pathname))?.name;
+  return (
+    <header className="masthead" ref={masthead}>
+      <Link to={PATHS.projects} className="name">
+        Steelyard
+      </Link>
+      <nav aria-label="Pages">
+        <ul className="places">
+          {places.map(({ name, to }) => (
+            <li key={name}>
+              <Link
+                to={to}
+                data-text={name}
+                aria-current={name === here ? 'page' : undefined}
+                data-here={name === here ? '' : undefined}
+              >
+                {name}
+              </Link>
+            </li>
+          ))}
+        </ul>
+      </nav>
+      <div className="who" data-here={person && here === undefined ? '' : undefined}>
+        {project && <ProjectChooser projects={projects} current={project} />}
+        {session && <AccountMenu session={session} />}
+      </div>
+      <Arm masthead={masthead} here={`${here} ${pathname} ${person?.id} ${project?.slug}`} />
+    </header>
+  );
+}
+
+interface Place {
+  readonly name: string;
+  readonly to: string;
+  readonly is: (pathname: string) => boolean;
+}
+
+function placesOf(project: string | undefined, administrator: boolean): Place[] {
+  const places: Place[] = [];
+  if (project !== undefined) {
+    const under = linkTo.history(project);
+    places.push(
+      {
+        name: 'History',
+        to: under,
+        is: (path) => path === under || path.startsWith(`${under}/runs`) || path === `${under}/compare`,
+      },
+      { name: 'Upload', to: linkTo.upload(project), is: (path) => path === linkTo.upload(project) },
+      {
+        name: 'People',
+        to: linkTo.members(project),
+        is: (path) => path === linkTo.members(project) || path === PATHS.people,
+      },
+      { name: 'Tokens', to: linkTo.tokens(project), is: (path) => path === linkTo.tokens(project) },
+    );
+  } else if (administrator) {
+    places.push({ name: 'People', to: PATHS.people, is: (path) => path === PATHS.people });
+  }
+  if (administrator) places.push({ name: 'Audit', to: PATHS.audit, is: (path) => path === PATHS.audit });
+  return places;
+}

@@ -1,0 +1,40 @@
+import { asProblem } from '#web/api/api-problem.ts';
+import { PATHS } from '#web/paths.ts';
+import { ActionLink } from './button.tsx';
+import { PageHead } from './page-head.tsx';
+import { ServerAway } from './server-away.tsx';
+
+/** A page that cannot be shown: not found, no permission, or the server away, each with a way on. */
+export function ProblemPage({ error, retry }: { error: unknown; retry: () => void }) {
+  const problem = asProblem(error);
+  if (problem.status === 404) return <NotFound detail={problem.detail} />;
+  if (problem.status === 403) return <NoPermission detail={problem.detail} hint={problem.hint} />;
+  return <ServerAway error={error} retry={retry} />;
+}
+
+export function NotFound({ detail }: { detail?: string }) {
+  return (
+    <>
+      <PageHead title="Nothing hangs here">
+        {detail ?? 'No page has this address. It may have been mistyped, or what it led to was removed.'}
+      </PageHead>
+      <p className="acts">
+        <ActionLink to={PATHS.projects}>To your projects</ActionLink>
+      </p>
+    </>
+  );
+}
+
+export function NoPermission({ detail, hint }: { detail?: string | undefined; hint?: string | undefined }) {
+  return (
+    <>
+      <PageHead title="Not yours to see">
+        <p>{detail ?? 'Your role does not reach this page.'}</p>
+        <p>{hint ?? 'An administrator gives roles: ask one of yours.'}</p>
+      </PageHead>
+      <p className="acts">
+        <ActionLink to={PATHS.projects}>To your projects</ActionLink>
+      </p>
+    </>
+  );
+}

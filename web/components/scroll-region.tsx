@@ -1,0 +1,20 @@
+import type { ReactNode } from 'react';
+
+/** A region that scrolls sideways on its own, labelled and reachable by keyboard, for tables and drawings that are wide. */
+export function ScrollRegion({
+  label,
+  keepFirst = false,
+  children,
+}: {
+  label: string;
+  /** The first column stands still. */
+  keepFirst?: boolean;
+  children: ReactNode;
+}) {
+  return (
+    // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls must take the focus to scroll by keyboard.
+    <section aria-label={label} tabIndex={0} className={`scroll ${keepFirst ? 'keep-first' : ''}`}>
+      {children}
+    </section>
+  );
+}
