@@ -1,0 +1,169 @@
+import { Link } from 'react-router-dom';
+import type { RunRow } from '#core/api/runs.ts';
+import { ReleasedMark } from '#web/components/released-mark.tsx';
+import { Time } from '#web/components/time.tsx';
+import { VerdictMark } from '#web/components/verdict-mark.tsx';
+import { linkTo } from '#web/paths.ts';
+import type { Sort } from './history-view.ts';
+import { runName } from './run-name.ts';
+import { columnsOf, type FigureColumn, unitsOfRows } from './runs-units.ts';
+import { SortHead } from './sort-head.tsx';
+
+/**
+ * The runs of one page of the history; on a narrow screen each becomes pairs of label and value. Roles are written out
+ * because `display` would take them away.
+ */
+export function RunsTable({
+  project,
+  rows,
+  sort,
+  onSort,
+  chosen,
+  onChoose,
+}: {
+  project: string;
+  rows: readonly RunRow[];
+  sort: Sort;
+  onSort: (sort: Sort) => void;
+  chosen: readonly RunRow[];
+  onChoose: (row: RunRow) => void;
+}) {
+  const { units, mixed } = unitsOfRows(rows);
+  const { mass, centre, moments } = columnsOf(rows, units);
+  const on = new Set(rows.map((r) => r.on));
+  return (
+    <>
+      {/* biome-ignore-start lint/a11y/noRedundantRoles: reflow sets display, which removes a table's own roles. */}
+      {/* biome-ignore-start lint/a11y/useSemanticElements: the same. */}
+      <table className="pairs mt-4" role="table">
+        <caption className="sr-only">Runs, {SORT_WORDS[sort]} first</caption>
+        <thead role="rowgroup">
+          <tr role="row">
+            <th role="columnheader" scope="col">
+              <span className="sr-only">chosen to compare</span>
+            </th>
+            <th role="columnheader" scope="col">
+              run
+            </th>
+            <th role="columnheader" scope="col">
+              assembly, state
+            </th>
+            <th role="columnheader" scope="col">
+              branch
+            </th>
+            <SortHead sort={sort} down="heaviest" up="lightest" onSort={onSort} numeric>
+              mass <i>{mass.scale.head}</i>
+            </SortHead>
+            <UnitHead name="centre x" column={centre} />
+            <UnitHead name="principal moments" column={moments} />
+            <th role="columnheader" scope="col">
+              verdict
+            </th>
+            <th role="columnheader" scope="col">
+              pushed by
+            </th>
+            <SortHead sort={sort} down="newest" up="oldest" onSort={onSort}>
+              when
+            </SortHead>
+          </tr>
+        </thead>
+        <tbody role="rowgroup">
+          {rows.map((row) => (
+            <tr key={row.id} role="row">
+              <td role="cell" data-label="compare">
+                <input
+                  type="checkbox"
+                  aria-label={`choose ${runName(row)}, ${row.assembly}, ${row.state}`}
+                  checked={chosen.some((c) => c.id === row.id)}
+                  onChange={() => onChoose(row)}
+                />
+              </td>
+              <th role="rowheader" scope="row" className="whitespace-nowrap">
+                <ReleaseState row={row} />
+                <Link to={linkTo.run(project, row.id)} className="code">
+                  {runName(row)}
+                </Link>
+                {row.dirty && <span className="soft text-sm"> not as committed</span>}
+                {row.tag && <span className="soft text-sm"> {row.tag}</span>}
+              </th>
+              <td role="cell" data-label="assembly, state">
+                <span>
+                  {row.assembly}, {row.state}
+                </span>
+              </td>
+              <td role="cell" data-label="branch">
+                <span className="code break-all">{row.branch ?? '–'}</span>
+              </td>
+              <td role="cell" className="n" data-label={`mass ${mass.scale.head}`}>
+                <span>{mass.text(row.mass)}</span>
+              </td>
+              <td role="cell" className="n" data-label={`centre x ${centre.scale.head}`}>
+                <span>{centre.text(row.centre?.[0])}</span>
+              </td>
+              <td role="cell" className="n" data-label={`moments ${moments.scale.head}`}>
+                <span>{row.moments ? row.moments.map(moments.text).join(' · ') : '—'}</span>
+              </td>
+              <td role="cell" data-label="verdict">
+                <span>
+                  <VerdictMark verdict={row.verdict} />
+                  <Recomputed row={row} />
+                </span>
+              </td>
+              <td role="cell" data-label="pushed by">
+                <span>{row.pushedBy}</span>
+              </td>
+              <td role="cell" data-label="when">
+                <Time at={row.at} />
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+      {/* biome-ignore-end lint/a11y/useSemanticElements: the same. */}
+      {/* biome-ignore-end lint/a11y/noRedundantRoles: reflow sets display, which removes a table's own roles. */}
+      <p className="soft mt-2 text-sm">
+        {on.size === 1
+          ? `${[...on][0]} masses`
+          : 'masses as each run is judged: predicted where its file has growth'}
+        ; principal moments ascending, about the centre
+        {mixed && '; SI, because the files on this page are written in different units'}
+      </p>
+    </>
+  );
+}
+
+const SORT_WORDS: Record<Sort, string> = {
+  newest: 'the newest',
+  oldest: 'the oldest',
+  heaviest: 'the heaviest',
+  lightest: 'the lightest',
+};
+
+const UnitHead = ({ name, column }: { name: string; column: FigureColumn }) => (
+  // biome-ignore lint/a11y/noRedundantRoles: reflow sets display, which removes a table's own roles.
+  <th role="columnheader" scope="col" className="n">
+    {name} <i>{column.scale.head}</i>
+  </th>
+);
+
+const ReleaseState = ({ row }: { row: RunRow }) => {
+  if (row.release === 'released') return <ReleasedMark />;
+  if (row.release === 'withdrawn') return <ReleasedMark withdrawn />;
+  return null;
+};
+
+/** Said only where it is not the usual: that the server came to the same bits. */
+function Recomputed({ row: { recomputation, release } }: { row: RunRow }) {
+  const said = [
+    recomputation.status === 'recomputed'
+      ? ''
+      : recomputation.status === 'waiting'
+        ? 'being recomputed'
+        : recomputation.status,
+    release === 'asked' ? 'release asked for' : '',
+  ].filter(Boolean);
+  const bad = recomputation.status === 'differs';
+  return said.length === 0 ? null : (
+    <span className={`block text-sm ${bad ? 'text-outside' : 'text-ink-soft'}`}>{said.join(' · ')}</span>
+  );
+}
