@@ -51,7 +51,7 @@ export function Form({
   const notice = useRef<HTMLDivElement>(null);
   useEffect(() => {
     if (Object.keys(faults).length > 0)
-      form.current?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus();
+      form.current?.querySelector<HTMLElement>('[aria-invalid="true"], [data-invalid]')?.focus();
   }, [faults]);
   useEffect(() => {
     if (error) notice.current?.focus();
