@@ -41,6 +41,7 @@ export function TrendPicture({ trend, project, title }: { trend: Trend; project:
 
   return (
     <div ref={frame} className="min-w-0">
+      {/* biome-ignore lint/a11y/useSemanticElements: a group of links drawn as a picture */}
       <svg
         ref={picture}
         viewBox={`0 0 ${at.width} ${at.height}`}
@@ -58,7 +59,7 @@ export function TrendPicture({ trend, project, title }: { trend: Trend; project:
           strokeWidth="1.6"
           strokeLinejoin="round"
         />
-        {/* biome-ignore lint/a11y/useKeyWithClickEvents: the points are links with keys of their own */}
+        {/* biome-ignore lint/a11y/noStaticElementInteractions: the points are links with keys of their own */}
         <rect
           x={at.left}
           y={0}

@@ -1,0 +1,39 @@
+import { Link, useLocation } from 'react-router-dom';
+
+export interface Place {
+  readonly file: string;
+  readonly line: number;
+}
+
+/** The anchor of one line of one input on the run's page. */
+export const lineAnchor = ({ file, line }: Place): string => `line:${file}:${line}`;
+
+/** Reads an anchor back; null where it is none. */
+export function readLineAnchor(hash: string): Place | null {
+  const found = /^#?line:(.+):(\d+)$/.exec(safelyDecoded(hash));
+  return found ? { file: found[1]!, line: Number(found[2]) } : null;
+}
+
+function safelyDecoded(hash: string): string {
+  try {
+    return decodeURIComponent(hash);
+  } catch {
+    return hash;
+  }
+}
+
+/** `drone.yaml:58` as a link to that line of the inputs below; the folders only where they are asked for. */
+export function FilePlace({ at, whole = false }: { at: Place; whole?: boolean }) {
+  const { search } = useLocation();
+  const name = whole ? at.file : at.file.slice(at.file.lastIndexOf('/') + 1);
+  return (
+    <Link
+      to={{ search, hash: encodeURI(lineAnchor(at)) }}
+      preventScrollReset
+      className="code whitespace-nowrap"
+      title={`${at.file}:${at.line}`}
+    >
+      {name}:{at.line}
+    </Link>
+  );
+}

@@ -1,0 +1,162 @@
+import { formatSignificant, printLimit, unitOfLimit, unitText } from '#core/figures/index.ts';
+import type { LimitResult, RollUpRecord } from '#core/record/record.ts';
+import { BeamPicture } from '#web/components/beam/beam.tsx';
+import { SectionHead } from '#web/components/section-head.tsx';
+import { VerdictMark } from '#web/components/verdict-mark.tsx';
+import { FilePlace } from './file-place.tsx';
+import type { RunView } from './run-view.ts';
+import { todayText, waiverState } from './waiver-state.ts';
+
+const CELL = 'max-md:block max-md:border-0 max-md:p-0';
+
+/** Every limit as a beam with its verdict and its margin; on a narrow screen the beam stands under the name. */
+export function LimitsSection({
+  record,
+  view,
+  baseline,
+}: {
+  record: RollUpRecord;
+  view: RunView;
+  /** Released values by name [SI], where one-sided beams have their fulcrum. */
+  baseline: Readonly<Record<string, number>>;
+}) {
+  const { limits } = record;
+  const judged = [...new Set(limits.map((l) => l.on))];
+  return (
+    <section aria-labelledby="limits">
+      <SectionHead title="Limits" id="limits">
+        {limits.length === 0
+          ? 'none stated in the file'
+          : judged.length === 1
+            ? `judged on ${judged[0]}`
+            : 'judged as each says'}
+      </SectionHead>
+      {limits.length === 0 ? (
+        <p className="soft">Nothing is limited in this state, so nothing was judged.</p>
+      ) : (
+        // biome-ignore lint/a11y/noRedundantRoles: reflow sets display, which removes a table's own roles.
+        <table role="table" className="max-md:block">
+          <caption className="sr-only">Limits: value, beam, verdict and margin of each</caption>
+          {/* biome-ignore lint/a11y/noRedundantRoles: reflow sets display. */}
+          <thead role="rowgroup" className="max-md:sr-only">
+            <tr>
+              <th scope="col">limit</th>
+              <th scope="col" className="n">
+                value
+              </th>
+              <th scope="col">beam</th>
+              <th scope="col">verdict</th>
+              <th scope="col">margin</th>
+            </tr>
+          </thead>
+          {/* biome-ignore lint/a11y/noRedundantRoles: reflow sets display. */}
+          <tbody role="rowgroup" className="max-md:block">
+            {limits.map((limit) => (
+              <LimitRow
+                key={`${limit.id} ${limit.name} ${limit.at.file} ${limit.at.line}`}
+                limit={limit}
+                view={view}
+                baseline={baseline[limit.name] ?? null}
+                sayOn={judged.length > 1}
+              />
+            ))}
+          </tbody>
+        </table>
+      )}
+    </section>
+  );
+}
+
+function LimitRow({
+  limit,
+  view,
+  baseline,
+  sayOn,
+}: {
+  limit: LimitResult;
+  view: RunView;
+  baseline: number | null;
+  sayOn: boolean;
+}) {
+  const printed = printLimit(limit, unitOfLimit(limit, view.units));
+  const waiver = waiverState(limit, todayText());
+  return (
+    // biome-ignore-start lint/a11y/noRedundantRoles: reflow sets display, which removes a table's own roles.
+    // biome-ignore-start lint/a11y/useSemanticElements: the same.
+    <tr
+      role="row"
+      className="align-middle max-md:grid max-md:grid-cols-[1fr_auto] max-md:gap-x-4 max-md:border-b max-md:border-rule max-md:py-3"
+    >
+      <th role="rowheader" scope="row" className={`w-[17%] align-middle ${CELL}`}>
+        {limit.name} <span className="u">{printed.unit}</span>
+        <span className="soft block whitespace-normal text-sm">{aimOf(limit, sayOn)}</span>
+      </th>
+      <td
+        role="cell"
+        className={`n w-[9%] align-middle ${limit.verdict === 'outside' ? 'outside' : ''} ${CELL}`}
+      >
+        {printed.value}
+      </td>
+      <td role="cell" className={`w-[42%] align-middle max-md:col-span-2 max-md:max-w-xl ${CELL}`}>
+        <BeamPicture limit={limit} printed={printed} baseline={baseline} />
+      </td>
+      <td role="cell" className={`w-[9%] align-middle ${CELL}`}>
+        <VerdictMark verdict={limit.verdict} />
+      </td>
+      <td role="cell" className={`align-middle max-md:col-span-2 ${CELL}`}>
+        {printed.words}
+        <span className="soft block text-sm">
+          <Details limit={limit} view={view} />
+        </span>
+        {waiver !== 'none' && (
+          <span className="block text-sm">
+            {waiver === 'expired' ? 'waiver expired' : 'waived until'} {limit.waiver!.until} by{' '}
+            {limit.waiver!.by}: {limit.waiver!.reason}
+          </span>
+        )}
+        {limit.verdict === 'outside' && waiver === 'none' && <span className="block text-sm">no waiver</span>}
+      </td>
+    </tr>
+    // biome-ignore-end lint/a11y/useSemanticElements: the same.
+    // biome-ignore-end lint/a11y/noRedundantRoles: reflow sets display, which removes a table's own roles.
+  );
+}
+
+/** What is limited, where the name alone does not say it. */
+const aimOf = ({ id, name, quantity, of, frame, on }: LimitResult, sayOn: boolean): string =>
+  [
+    id ?? '',
+    quantity === name ? '' : quantity,
+    of === null ? '' : `of ${of}`,
+    frame === null ? '' : `in frame ${frame}`,
+    sayOn ? `on ${on}` : '',
+  ]
+    .filter(Boolean)
+    .join(' · ');
+
+function Details({ limit, view }: { limit: LimitResult; view: RunView }) {
+  const unit = unitOfLimit(limit, view.units);
+  const { basic, predicted } = limit.values;
+  const grown = limit.on === 'predicted' && basic !== null && predicted !== null && basic !== predicted;
+  const heaviest = limit.verdict === 'outside' ? limit.heaviest : [];
+  return (
+    <>
+      {grown && `basic ${formatSignificant(basic! / unit.factor)} · `}
+      {limit.owner && `owner ${limit.owner} · `}
+      {limit.source && `${limit.source} · `}
+      <FilePlace at={limit.at} />
+      {heaviest.length > 0 && (
+        <span className="block">
+          weighs most:{' '}
+          {heaviest.map((part, i) => (
+            <span key={part.path}>
+              {i > 0 && ', then '}
+              {part.path} {formatSignificant(part.value / unit.factor, 4)} {unitText(unit.text)} (
+              <FilePlace at={part.at} />)
+            </span>
+          ))}
+        </span>
+      )}
+    </>
+  );
+}
