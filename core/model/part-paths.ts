@@ -1,7 +1,22 @@
 import { nearestName } from '../nearest-name.ts';
 import type { PartModel } from './model.ts';
 
-const COPY = /\[\d+\]$/;
+const COPY = /^(.+)\[([1-9]\d*)\]$/;
+
+/** A step of a path taken apart: `servo[2]` is copy 2 of `servo`; null where no copy is picked. */
+export function readStep(step: string): { name: string; copy: number | null } {
+  const [, name, copy] = COPY.exec(step) ?? [];
+  return name === undefined ? { name: step, copy: null } : { name, copy: Number(copy) };
+}
+
+/** Whether a path is at another, below it, or what that means by leaving copies open: `servo[1]/horn` is at `servo/horn`. */
+export function isAtOrBelow(path: string, root: string): boolean {
+  const steps = path.split('/');
+  return root.split('/').every((wanted, i) => {
+    const step = steps[i];
+    return step !== undefined && (step === wanted || readStep(step).name === wanted);
+  });
+}
 
 /** Children of a part as paths name them: its own, or the top-level parts of the file it includes. */
 const childrenOf = (part: PartModel): readonly PartModel[] =>
@@ -18,13 +33,12 @@ export function findPart(
 ): { part: PartModel } | { unknown: string; nearest: string | undefined } {
   let here = parts;
   let found: PartModel | undefined;
-  for (const segment of path.split('/')) {
-    const name = segment.replace(COPY, '');
+  for (const step of path.split('/')) {
+    const { name, copy } = readStep(step);
     const next = here.find((p) => p.name === name);
-    const repeats = next && (next.placing.repeat.length > 0 || !COPY.test(segment));
-    if (!next || !repeats)
+    if (!next || (copy !== null && next.placing.repeat.length === 0))
       return {
-        unknown: segment,
+        unknown: step,
         nearest: nearestName(
           name,
           here.map((p) => p.name),

@@ -4,12 +4,13 @@ import { merge, subtractBody } from '../inertia/merge.ts';
 import type { Placement } from '../inertia/placement.ts';
 import { bodyInFrame, QUANTITIES, quantityVector } from '../inertia/quantities.ts';
 import type { LimitModel } from '../model/model.ts';
-import { onBoth, placeMoments, scaleMoments, turnToCut } from './both-moments.ts';
+import { isAtOrBelow } from '../model/part-paths.ts';
+import { onBoth, placeMoments, scaleMoments, sumAndClose, turnToCut } from './both-moments.ts';
 import { leafBody } from './leaf-body.ts';
 import { frameOf } from './placing.ts';
 import type { RollUp } from './roll-up.ts';
 import { evaluate, type Scope } from './scope.ts';
-import { type Both, findMember, type Leaf, netMasses } from './tree.ts';
+import { type Both, type Found, findMembers, type Leaf, netMasses } from './tree.ts';
 
 /** A limit judged in one state; SI. */
 export interface JudgedLimit {
@@ -81,7 +82,8 @@ export function marginOf(
 interface Target {
   readonly bodies: Both<Body | null>;
   readonly masses: Both<number>;
-  readonly leaves: readonly Leaf[];
+  /** Those in it, with their sign in it; worked out for broken limits alone. */
+  leaves(): readonly Leaf[];
 }
 
 /**
@@ -89,37 +91,42 @@ interface Target {
  * weighs nothing, and has no centre or tensor.
  */
 function targetOf(limit: LimitModel, roll: RollUp): Target {
-  if (limit.of === null) return { bodies: roll.total, masses: netMasses(roll.moments), leaves: roll.leaves };
+  if (limit.of === null)
+    return { bodies: roll.total, masses: netMasses(roll.moments), leaves: () => roll.leaves };
   return (
     targetAt(limit.of, roll) ?? {
       bodies: { basic: null, predicted: null },
       masses: { basic: 0, predicted: 0 },
-      leaves: [],
+      leaves: () => [],
     }
   );
 }
 
-/** A part's, group's or set of copies' own numbers in body axes; null where this state has none at the path. */
+/**
+ * The own numbers of what stands at a path (a part, a group, copies together), in body axes; null where this state has
+ * none there. Asked for by name, a cut-out's numbers are those of what is cut away.
+ */
 export function targetAt(path: string, roll: RollUp): Target | null {
-  const found = findMember(roll.members, path);
-  if (!found) return null;
-  const scaled: Both<Moments> = {
-    basic: scaleMoments(found.member.moments.basic, found.factor.basic),
-    predicted: scaleMoments(found.member.moments.predicted, found.factor.predicted),
-  };
-  // Asked for by name, a cut-out's numbers are those of what is cut away.
-  const cut = found.member.kind === 'one' && found.member.node.part.cut;
-  const moments = placeMoments(found.placement, cut ? onBoth(scaled, turnToCut) : scaled);
-  const leaves = roll.leaves.filter((leaf) => isAtOrBelow(leaf.path, path));
+  const found = findMembers(roll.members, path);
+  if (found.length === 0) return null;
+  // All that stands at one path is one part of the file, so a cut-out is one in every standing.
+  const { member, around } = found[0]!;
+  const { cut } = member.node.part;
+  const sum = sumAndClose(found.map(momentsInBodyAxes));
+  const moments = cut ? onBoth(sum, turnToCut) : sum;
+  const flips = cut === (around.sign === 1);
+  const leaves = () =>
+    roll.leaves
+      .filter((leaf) => isAtOrBelow(leaf.path, path))
+      .map((leaf): Leaf => (flips ? { ...leaf, sign: leaf.sign === 1 ? -1 : 1 } : leaf));
   return { bodies: onBoth(moments, netBody), masses: netMasses(moments), leaves };
 }
 
-/** Whether a path is at another, below it, or one of its copies. */
-export function isAtOrBelow(path: string, root: string): boolean {
-  if (!path.startsWith(root)) return false;
-  const next = path[root.length];
-  return next === undefined || next === '/' || (next === '[' && /^\[\d+\]/.test(path.slice(root.length)));
-}
+const momentsInBodyAxes = ({ member: { moments }, around: { factor, placement } }: Found): Both<Moments> =>
+  placeMoments(placement, {
+    basic: scaleMoments(moments.basic, factor.basic),
+    predicted: scaleMoments(moments.predicted, factor.predicted),
+  });
 
 export function frameNamed(name: string | null, scope: Scope): Placement | null {
   const frame = name === null ? undefined : scope.file.frames.find((f) => f.name === name);
@@ -175,7 +182,7 @@ function heaviestIn(
   nearest: 'min' | 'max',
 ): { leaf: Leaf; value: number }[] {
   const value = limitValue(limit, vectors, on, roll.scope)!;
-  const moved = target.leaves.flatMap((leaf) => {
+  const moved = target.leaves().flatMap((leaf) => {
     const without = onBodies(
       {
         bodies: {

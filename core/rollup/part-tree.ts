@@ -3,9 +3,10 @@ import { scaleBody } from '../inertia/body.ts';
 import { compose } from '../inertia/placement.ts';
 import { judgeBody } from '../inertia/possibility.ts';
 import type { FileModel, PartModel } from '../model/model.ts';
-import { type Where, within } from '../model/where.ts';
+import type { Where } from '../model/where.ts';
 import { formatQuantity, MASS, unitFor } from '../units/index.ts';
 import { onBoth, placeMoments, scaleMoments, sumAndClose, turnToCut } from './both-moments.ts';
+import { checkCopies, omittedIn } from './check-copies.ts';
 import { copiesOf } from './copies.ts';
 import { warnIfCutLeavesHost } from './cut-extent.ts';
 import { growthOf, growthTablesOf } from './growth.ts';
@@ -54,7 +55,6 @@ function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: 
     return { kind: 'one', name: part.name, node, placement, moments: placeMoments(placement, node.moments) };
   const placed = placeMoments(placement, node.moments);
   const standings = copiesOf(repeatsOf(part.placing.repeat, scope));
-  checkOmittedCopies(path, standings.length, scope);
   const copies = standings.flatMap((copy, i) => {
     const name = `${part.name}[${i + 1}]`;
     if (scope.omit.has(prefix + name)) return [];
@@ -66,20 +66,14 @@ function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: 
       moments: placeMoments(copy, placed),
     };
   });
-  return { kind: 'copies', name: part.name, copies, moments: sumAndClose(copies.map((c) => c.moments)) };
-}
-
-/** A state may leave single copies out; one that does not exist is a slip. */
-function checkOmittedCopies(path: string, count: number, scope: Scope): void {
-  scope.state.omit.forEach((omitted, i) => {
-    const copy = omitted.startsWith(`${path}[`) && /^\[(\d+)\]$/.exec(omitted.slice(path.length));
-    if (!copy || (Number(copy[1]) >= 1 && Number(copy[1]) <= count)) return;
-    faultAt(scope, within(within(scope.state.where, 'omit'), i), {
-      code: 'MODEL_UNKNOWN_PART',
-      message: `expected a copy from ${path}[1] to ${path}[${count}], found '${omitted}'`,
-      hint: 'copies are counted from 1, the original first',
-    });
-  });
+  return {
+    kind: 'copies',
+    name: part.name,
+    node,
+    count: standings.length,
+    copies,
+    moments: sumAndClose(copies.map((c) => c.moments)),
+  };
 }
 
 function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scope): PartNode | null {
@@ -148,7 +142,7 @@ function leavesIn(
 }
 
 const leavesOf = (member: Member): number =>
-  member.kind === 'one' ? member.node.leaves : member.copies.length * (member.copies[0]?.node.leaves ?? 0);
+  member.kind === 'one' ? member.node.leaves : member.copies.length * member.node.leaves;
 
 const sumOf = (members: readonly Member[], of: (member: Member) => number) =>
   members.reduce((sum, member) => sum + of(member), 0);
@@ -158,8 +152,7 @@ export function refuseTooManyAtTop(members: readonly Member[], scope: Scope): vo
   const leaves = sumOf(members, leavesOf);
   if (leaves <= LEAVES_AT_MOST) return;
   const largest = members.reduce((a, b) => (leavesOf(b) > leavesOf(a) ? b : a));
-  const node = largest.kind === 'one' ? largest.node : largest.copies[0]!.node;
-  refuseTooMany(node.part.where, largest.name, leaves, scope);
+  refuseTooMany(largest.node.part.where, largest.name, leaves, scope);
 }
 
 function refuseTooMany(where: Where, path: string, leaves: number, scope: Scope): void {
@@ -174,10 +167,7 @@ function refuseTooMany(where: Where, path: string, leaves: number, scope: Scope)
 
 /** What rounding is granted to the bought items of some members together [kg·m²]. */
 export const slackOf = (members: readonly Member[]): number =>
-  members.reduce(
-    (sum, m) => sum + (m.kind === 'one' ? m.node.slack : m.copies.reduce((s, c) => s + c.node.slack, 0)),
-    0,
-  );
+  members.reduce((sum, m) => sum + m.node.slack * (m.kind === 'one' ? 1 : m.copies.length), 0);
 
 /** An override scales the net of children and cuts to the new mass, the centre kept. */
 function overrideOf(part: PartModel, path: string, sum: Both<Moments>, growth: number, scope: Scope) {
@@ -229,7 +219,9 @@ function includedMembers(
   const { file } = shape;
   const set = new Map([...shape.with].map(([slot, quantity]) => [slot, evaluate(quantity, scope)]));
   const inner = openScope(file, includedState(part, shape, scope), set, scope.run, path, scope);
-  return inner ? membersOf(file.parts, '', { ...attributes, hostDensity: null }, inner) : [];
+  const members = membersOf(file.parts, '', { ...attributes, hostDensity: null }, inner);
+  checkCopies(omittedIn(inner), members, inner);
+  return members;
 }
 
 function includedState(

@@ -5,6 +5,7 @@ import { judgeBody } from '../inertia/possibility.ts';
 import type { Project } from '../model/read-project.ts';
 import { nearestName } from '../nearest-name.ts';
 import { sumAndClose } from './both-moments.ts';
+import { checkCopies, judgedIn, omittedIn } from './check-copies.ts';
 import { warnIfCutLeavesHost } from './cut-extent.ts';
 import { membersOf, NOTHING_INHERITED, openScope, refuseTooManyAtTop, slackOf } from './part-tree.ts';
 import { faultAt, type Run, type Scope } from './scope.ts';
@@ -54,6 +55,7 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
   const scope = openScope(root, options.state, options.set ?? new Map(), run, '', null);
   run.faults.check();
   const members = membersOf(root.parts, '', NOTHING_INHERITED, scope);
+  checkCopies([...omittedIn(scope), ...judgedIn(scope)], members, scope);
   run.faults.check();
   refuseTooManyAtTop(members, scope);
   warnIfCutLeavesHost(null, members, scope);

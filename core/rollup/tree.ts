@@ -2,6 +2,7 @@ import { type Moments, netBody, netMass } from '../inertia/balance-sum.ts';
 import type { Body } from '../inertia/body.ts';
 import { compose, IN_PLACE, type Placement } from '../inertia/placement.ts';
 import type { PartModel } from '../model/model.ts';
+import { readStep } from '../model/part-paths.ts';
 import type { OwnBody } from './own-body.ts';
 import type { Scope } from './scope.ts';
 
@@ -50,95 +51,111 @@ export type Member =
   | {
       readonly kind: 'copies';
       readonly name: string;
+      /** What each copy is. */
+      readonly node: PartNode;
+      /** How many the part makes; `copies` lacks those that the state leaves out. */
+      readonly count: number;
       readonly copies: readonly (Member & { kind: 'one' })[];
       readonly moments: Both<Moments>;
     };
 
-/** A leaf of the tree as it stands in the whole: one solid or body, override factors and cut signs worked in. */
-export interface Leaf {
-  readonly path: string;
-  readonly node: PartNode;
+/** How a member's own axes and masses count in the whole. */
+export interface Standing {
+  /** The axes in body axes. */
+  readonly placement: Placement;
   /** −1 inside a cut-out (+1 for a cut in a cut). */
   readonly sign: 1 | -1;
+  /** Overrides of all groups around it. */
   readonly factor: Both<number>;
-  /** The node's axes in body axes. */
-  readonly placement: Placement;
+}
+
+const AT_THE_TOP: Standing = { placement: IN_PLACE, sign: 1, factor: { basic: 1, predicted: 1 } };
+
+/** How what is in a member stands, where the member's parent stands so. */
+const inside = (around: Standing, { node, placement }: Member & { kind: 'one' }): Standing => ({
+  placement: compose(around.placement, placement),
+  sign: node.part.cut ? (around.sign === 1 ? -1 : 1) : around.sign,
+  factor: {
+    basic: around.factor.basic * node.factor.basic,
+    predicted: around.factor.predicted * node.factor.predicted,
+  },
+});
+
+/** A leaf of the tree as it stands in the whole: one solid or body, override factors and cut signs worked in. */
+export interface Leaf extends Standing {
+  readonly path: string;
+  readonly node: PartNode;
 }
 
 /** Visits every leaf in file order. */
 export function* leavesOf(
   members: readonly Member[],
   prefix = '',
-  placement: Placement = IN_PLACE,
-  sign: 1 | -1 = 1,
-  factor: Both<number> = { basic: 1, predicted: 1 },
+  around: Standing = AT_THE_TOP,
 ): Generator<Leaf> {
-  for (const member of members) {
-    if (member.kind === 'copies') {
-      yield* leavesOf(member.copies, prefix, placement, sign, factor);
-      continue;
+  for (const member of members)
+    for (const one of standingsOf(member)) {
+      const path = prefix + one.name;
+      const here = inside(around, one);
+      if (one.node.own) yield { path, node: one.node, ...here };
+      yield* leavesOf(one.node.members, `${path}/`, here);
     }
-    const { node } = member;
-    const path = prefix + member.name;
-    const here = compose(placement, member.placement);
-    const turned = node.part.cut ? (sign === 1 ? -1 : 1) : sign;
-    const scaled = {
-      basic: factor.basic * node.factor.basic,
-      predicted: factor.predicted * node.factor.predicted,
-    };
-    if (node.own) yield { path, node, sign: turned, factor: scaled, placement: here };
-    yield* leavesOf(node.members, `${path}/`, here, turned, scaled);
-  }
 }
 
-/** A member found by path, and where its parent's axes stand in body axes. */
+const standingsOf = (member: Member | undefined): readonly (Member & { kind: 'one' })[] =>
+  member === undefined ? [] : member.kind === 'copies' ? member.copies : [member];
+
+/** A member found by path, and how its parent stands. */
 export interface Found {
   readonly member: Member;
-  readonly path: string;
-  readonly placement: Placement;
-  readonly sign: 1 | -1;
-  /** Overrides of the groups around it. */
-  readonly factor: Both<number>;
+  readonly around: Standing;
 }
 
-/** Finds a member by path: `servo` is all copies together, `servo[2]` one of them. Null where the state has none. */
-export function findMember(members: readonly Member[], path: string): Found | null {
-  let here: Omit<Found, 'member' | 'path'> & { members: readonly Member[] } = {
-    members,
-    placement: IN_PLACE,
-    sign: 1,
-    factor: { basic: 1, predicted: 1 },
-  };
-  const segments = path.split('/');
-  for (const [i, segment] of segments.entries()) {
-    const member = memberNamed(here.members, segment);
+/**
+ * What stands at a path: `servo` is all copies as one member, `servo[2]` one of them, `servo/horn` the horns of every
+ * copy. Nothing where the state has none.
+ */
+export function findMembers(members: readonly Member[], path: string): Found[] {
+  const steps = path.split('/');
+  const last = steps.pop()!;
+  let here = [{ members, around: AT_THE_TOP }];
+  for (const step of steps)
+    here = here.flatMap(({ members: among, around }) =>
+      standingsOf(memberNamed(among, step)).map((one) => ({
+        members: one.node.members,
+        around: inside(around, one),
+      })),
+    );
+  return here.flatMap(({ members: among, around }) => {
+    const member = memberNamed(among, last);
+    return member ? [{ member, around }] : [];
+  });
+}
+
+function memberNamed(members: readonly Member[], step: string): Member | undefined {
+  const { name, copy } = readStep(step);
+  const member = members.find((m) => m.name === name);
+  if (copy === null || member?.kind !== 'copies') return copy === null ? member : undefined;
+  return member.copies.find((c) => c.name === step);
+}
+
+/** The first copy that a path names and its part does not make, and how many it makes; null where there is none. */
+export function missingCopy(
+  members: readonly Member[],
+  path: string,
+): { readonly part: string; readonly count: number } | null {
+  let here = members;
+  let part = '';
+  for (const step of path.split('/')) {
+    const { name, copy } = readStep(step);
+    const member = here.find((m) => m.name === name);
     if (!member) return null;
-    const { placement, sign, factor } = here;
-    if (i === segments.length - 1) return { member, path, placement, sign, factor };
-    const one = member.kind === 'copies' ? (member.copies.length === 1 ? member.copies[0]! : null) : member;
-    if (!one) return null;
-    here = {
-      members: one.node.members,
-      placement: compose(placement, one.placement),
-      sign: one.node.part.cut ? (sign === 1 ? -1 : 1) : sign,
-      factor: {
-        basic: factor.basic * one.node.factor.basic,
-        predicted: factor.predicted * one.node.factor.predicted,
-      },
-    };
+    part += part === '' ? name : `/${name}`;
+    if (member.kind === 'copies' && copy !== null && copy > member.count)
+      return { part, count: member.count };
+    here = member.node.members;
   }
   return null;
-}
-
-function memberNamed(members: readonly Member[], name: string): Member | undefined {
-  for (const member of members) {
-    if (member.name === name) return member;
-    if (member.kind === 'copies') {
-      const copy = member.copies.find((c) => c.name === name);
-      if (copy) return copy;
-    }
-  }
-  return undefined;
 }
 
 /** The net bodies of a pair of moments; null where no mass remains. */

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { selectPart } from '#core/record/select-part.ts';
 import { expectClose } from '../../helpers/expect-body.ts';
 import { referenceCase } from '../../helpers/reference-cases.ts';
 import { faultsOf, type Given, placesOf, recordOfText, rollUpText } from '../../helpers/roll-up-text.ts';
@@ -267,6 +268,16 @@ describe('includes', () => {
     expect(predicted('').limits).toEqual([]);
   });
 
+  it('have the copies that an outer state leaves out by their path', () => {
+    const wing = 'assembly: w\nparts: [ { name: p, solid: particle, mass: 1, repeat: { mirror: xz } } ]';
+    const leaving = (path: string) =>
+      `assembly: t\nstates: { s: { omit: [ "${path}" ] } }\nparts: [ { name: w, include: w.yaml } ]`;
+    expect(mass(leaving('w/p[2]'), { files: { 'w.yaml': wing } })).toBe(1);
+    expect(placesOf(faultsOf(leaving('w/p[3]'), { files: { 'w.yaml': wing } }))).toEqual([
+      'MODEL_UNKNOWN_PART 2:24',
+    ]);
+  });
+
   it('lose the parts that an outer state leaves out by their path', () => {
     const yaml = `
       assembly: t
@@ -373,6 +384,75 @@ describe('limits', () => {
       [0, 'within'],
       [null, 'outside'],
     ]);
+  });
+
+  describe('of a part inside a repeated one', () => {
+    const servos = (more: string, head = '') => `
+      assembly: l
+      units: { length: mm, mass: g }
+      ${head}
+      parts:
+        - name: servo
+          at: [ 0, 30, 0 ]
+          repeat: { mirror: xz }
+          parts:
+            - { name: horn, solid: particle, mass: 50, at: [ 10, 5, 0 ] }
+            - name: case
+              solid: { box: { size: [ 20, 10, 10 ] } }
+              density: 2 g/cm^3
+              parts: [ { name: hole, solid: { box: { size: [ 2, 2, 2 ] } }, cut: true, at: [ 1, 2, 3 ] } ]
+      ${more}
+    `;
+    const of = (path: string, quantity = 'mass', max = '1') =>
+      limit(servos(`limits: [ { name: x, quantity: ${quantity}, of: "${path}", max: ${max} } ]`));
+
+    it('weigh that part in all copies together, or in the copy that is named', () => {
+      expect(of('servo/horn')).toMatchObject({ value: expect.closeTo(0.1, 15), verdict: 'outside' });
+      expect(of('servo[2]/horn').value).toBeCloseTo(0.05, 15);
+      // Horns at y = ±35 mm: 2 · 50 g · (35 mm)².
+      expect(of('servo/horn', 'inertia.zz').value).toBeCloseTo(0.1 * 0.035 ** 2, 18);
+      expect(of('servo[2]/horn', 'centre.y').value).toBeCloseTo(-0.035, 15);
+      expect(of('servo/horn').heaviest.map((h) => h.path)).toEqual(['servo[1]/horn', 'servo[2]/horn']);
+    });
+
+    it('weigh what cut-outs of all copies take away, and name them where that is too much', () => {
+      // 8 mm³ of 2 g/cm³ each.
+      expect(of('servo/case/hole', 'mass', '0.001')).toMatchObject({
+        value: expect.closeTo(32e-6, 18),
+        heaviest: [
+          { path: 'servo[1]/case/hole', value: expect.closeTo(16e-6, 18) },
+          { path: 'servo[2]/case/hole', value: expect.closeTo(16e-6, 18) },
+        ],
+      });
+    });
+
+    it('refuse a copy that the part does not make, where it is named', () => {
+      const limits = (path: string, more = '') =>
+        servos(`limits:\n        - { name: x, quantity: mass, of: "${path}", max: 1${more} }`);
+      const [fault] = faultsOf(limits('servo[5]'));
+      expect(placesOf([fault!])).toEqual(['MODEL_UNKNOWN_PART 15:36']);
+      expect(fault!.message).toBe("expected a copy from servo[1] to servo[2], found 'servo[5]'");
+      expect(faultsOf(limits('servo[3]/horn'))[0]!.code).toBe('MODEL_UNKNOWN_PART');
+      expect(faultsOf(limits('servo[0]'))[0]!.code).toBe('MODEL_UNKNOWN_PART');
+      expect(faultsOf(limits('servo[01]'))[0]!.code).toBe('MODEL_UNKNOWN_PART');
+    });
+
+    it('weigh nothing of a copy that the state leaves out', () => {
+      const yaml = servos(
+        'limits: [ { name: x, quantity: mass, of: "servo[2]/horn", max: 1 }, { name: y, quantity: mass, of: servo/horn, max: 1 } ]',
+        'states: { one: { omit: [ "servo[2]" ] } }',
+      );
+      expect(recordOfText(yaml).limits.map((l) => l.value)).toEqual([0, expect.closeTo(0.05, 15)]);
+    });
+
+    it('are what `--of` picks as well', () => {
+      const yaml = servos('');
+      const roll = rollUpText(yaml);
+      const picked = (path: string) => selectPart(roll, recordOfText(yaml), path).basic;
+      expect(picked('servo/horn').mass).toBeCloseTo(0.1, 15);
+      expectClose(picked('servo/horn').centre!, [0.01, 0, 0], 1e-15);
+      expect(() => picked('servo[3]/horn')).toThrow('servo[3]/horn');
+    });
   });
 
   it('hold what a published spinner needs: the tilt of its axis (½ atan2(2 Ixz, Izz − Ixx))', () => {
