@@ -5,6 +5,8 @@ export const EXIT = {
   broken: 1,
   /** The input or the call is wrong. */
   wrong: 2,
+  /** Nothing else is wrong, but a record did not reach the server, or the server refused it. */
+  unsent: 3,
   /** A bug in Steelyard. */
   bug: 70,
   interrupted: 130,

@@ -36,9 +36,10 @@ export function endQuietlyOnClosedPipe(): void {
  * Writes a file beside its place and renames it there, so that Ctrl-C or a full disk leaves the old file or the new one
  * whole.
  *
+ * @param mode permissions of a file that only its owner may read, such as 0o600
  * @throws InputError FILE_NOT_WRITTEN
  */
-export function writeWhole(path: string, text: string): void {
+export function writeWhole(path: string, text: string, mode?: number): void {
   const beside = `${path}.${process.pid}.part`;
   let interrupted = false;
   const note = () => {
@@ -47,19 +48,11 @@ export function writeWhole(path: string, text: string): void {
   // While the two calls run a signal waits; it is obeyed when the file stands.
   process.once('SIGINT', note);
   try {
-    writeFileSync(beside, text);
+    writeFileSync(beside, text, mode === undefined ? {} : { mode });
     renameSync(beside, path);
   } catch (error) {
     rmSync(beside, { force: true });
-    const { code } = error as NodeJS.ErrnoException;
-    const why =
-      code === 'ENOSPC'
-        ? 'the disk is full'
-        : code === 'ENOENT'
-          ? 'its folder does not exist'
-          : code === 'EACCES'
-            ? 'permission is denied'
-            : code;
+    const why = whyNotWritten(error);
     throw new InputError([
       {
         code: 'FILE_NOT_WRITTEN',
@@ -73,4 +66,19 @@ export function writeWhole(path: string, text: string): void {
       if (interrupted) process.exit(EXIT.interrupted);
     });
   }
+}
+
+/** Why a file could not be written, in words that follow "found that". */
+export function whyNotWritten(error: unknown): string {
+  const { code, message } = error as NodeJS.ErrnoException;
+  const why: Record<string, string> = {
+    ENOSPC: 'the disk is full',
+    EDQUOT: 'the quota of the disk is used up',
+    ENOENT: 'its folder does not exist',
+    ENOTDIR: 'a file stands where its folder should be',
+    EACCES: 'permission is denied',
+    EPERM: 'permission is denied',
+    EROFS: 'the disk can only be read',
+  };
+  return code === undefined ? message : (why[code] ?? code);
 }

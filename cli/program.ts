@@ -5,9 +5,12 @@ import { addCompletion } from './commands/completion.ts';
 import { type Context, createContext } from './commands/context.ts';
 import { addDiff } from './commands/diff.ts';
 import { addNew } from './commands/new.ts';
+import { addPush } from './commands/push.ts';
 import { addRun } from './commands/run.ts';
 import { addSchema } from './commands/schema.ts';
+import { addSignIn } from './commands/sign-in.ts';
 import { addSolids } from './commands/solids.ts';
+import { addTray } from './commands/tray.ts';
 import { addWhy } from './commands/why.ts';
 import { EXIT, type ExitStatus } from './exit-status.ts';
 import { endQuietlyOnClosedPipe, type Io, processIo } from './io.ts';
@@ -47,6 +50,7 @@ export function buildProgram(context: Context): Command {
       'after',
       `
 Exit status: 0 fine, 1 a limit is broken, 2 the input or the call is wrong,
+3 nothing else is wrong but a record did not reach the team server,
 70 a bug, 130 interrupted.
 
 First steps:
@@ -55,8 +59,8 @@ First steps:
   steelyard check drone.yaml      the same, and the limits decide the status`,
     )
     .hook('preAction', (_, action) => applySharedOptions(context, action));
-  for (const add of [addRun, addCheck, addDiff, addWhy, addSolids, addSchema, addNew, addCompletion])
-    add(program, context);
+  const commands = [addRun, addCheck, addDiff, addWhy, addPush, addTray, addSignIn, addSolids, addSchema];
+  for (const add of [...commands, addNew, addCompletion]) add(program, context);
   addSharedOptions(program);
   for (const command of program.commands) addSharedOptions(command);
   return program;

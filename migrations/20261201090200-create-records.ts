@@ -41,7 +41,7 @@ export const createRecords = sqlMigration(
     state        text NOT NULL,
     branch       text NOT NULL DEFAULT '',
     verdict      text NOT NULL CHECK (verdict IN ('within', 'outside', 'unlimited')),
-    at           timestamptz NOT NULL DEFAULT clock_timestamp(),
+    at           timestamptz(3) NOT NULL DEFAULT clock_timestamp(),
     commit       text,
     tag          text,
     dirty        boolean NOT NULL DEFAULT false,

@@ -43,6 +43,7 @@ export const configSchema = z.object({
     .enum(['silent', 'fatal', 'error', 'warn', 'info', 'debug'])
     .default('info')
     .describe('what is logged'),
+  RATE_PER_MINUTE: whole(12_000, 10, 10_000_000).describe('the most requests a minute from one address'),
   PASSWORD_COST: whole(12, 4, 15).describe('the cost of a password hash (bcrypt)'),
   DEMO: z
     .enum(['yes', 'no'])

@@ -5,6 +5,8 @@ export const SHELLS: readonly string[] = ['bash', 'zsh', 'fish'];
 interface Known {
   readonly name: string;
   readonly about: string;
+  /** Whether it takes anything but options. */
+  readonly takesFiles: boolean;
   readonly options: readonly {
     flag: string;
     about: string;
@@ -24,6 +26,7 @@ function known(command: Command): Known {
   return {
     name: command.name(),
     about: command.description().split('\n')[0] ?? '',
+    takesFiles: command.registeredArguments.length > 0,
     options: command.options.map((o) => ({
       flag: o.long ?? o.short ?? '',
       about: o.description,
@@ -44,6 +47,7 @@ function bash(commands: readonly Known[]): string {
         `    ${flag}) COMPREPLY=( $(compgen -W "${list.join(' ')}" -- "$current") ); return ;;`,
     )
     .join('\n');
+  const bare = commands.filter((c) => !c.takesFiles).map((c) => c.name);
   return `# bash completion for steelyard
 _steelyard() {
   local current="\${COMP_WORDS[COMP_CWORD]}" command="\${COMP_WORDS[1]}" words
@@ -63,7 +67,7 @@ ${choices}
     COMPREPLY=( $(compgen -W "$words" -- "$current") )
   elif [ "$command" = completion ]; then
     COMPREPLY=( $(compgen -W "${SHELLS.join(' ')}" -- "$current") )
-  else
+  elif [[ " ${bare.join(' ')} " != *" $command "* ]] || [[ "\${COMP_WORDS[COMP_CWORD-1]}" == -* ]]; then
     COMPREPLY=( $(compgen -f -- "$current") )
   fi
 }
@@ -82,7 +86,8 @@ function zsh(commands: readonly Known[]): string {
         (o) =>
           `'${o.flag}${o.takesValue ? '=' : ''}[${zshAbout(o.about)}]${o.takesValue ? (o.choices.length > 0 ? `:value:(${o.choices.join(' ')})` : ':value:_files') : ''}'`,
       );
-      const rest = c.name === 'completion' ? `'1:shell:(${SHELLS.join(' ')})'` : `'*:file:_files'`;
+      const files = c.takesFiles ? `'*:file:_files'` : '';
+      const rest = c.name === 'completion' ? `'1:shell:(${SHELLS.join(' ')})'` : files;
       return `    ${c.name}) _arguments ${options.join(' ')} ${rest} ;;`;
     })
     .join('\n');

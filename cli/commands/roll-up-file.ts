@@ -23,6 +23,7 @@ export interface RollUpRequest {
 /** A file rolled up in every state asked for. */
 export interface FileRun {
   readonly project: Project;
+  readonly source: ProjectSource;
   readonly rolls: readonly RollUp[];
   readonly records: readonly RollUpRecord[];
 }
@@ -34,7 +35,7 @@ export async function rollUpFile(file: string, request: RollUpRequest, context: 
   // A rejection is reported by the await below; until then it must not count as unhandled.
   provenance.catch(() => undefined);
   const { project, rolls } = await rollUpSource(path, source, request, context);
-  return { project, rolls, records: recordsOf(rolls, await provenance) };
+  return { project, source, rolls, records: recordsOf(rolls, await provenance) };
 }
 
 /** The source of a file given on the command line, and its path in the project. */

@@ -8,6 +8,7 @@ import { EXIT } from '../exit-status.ts';
 import { writeWhole } from '../io.ts';
 import { annotationsOfFaults, annotationsOfRecords, formatAnnotations } from '../output/ci-annotations.ts';
 import { ciState } from '../project/ci.ts';
+import type { Settings } from '../push/settings.ts';
 import type { Context } from './context.ts';
 import { dayOf, formatOfFile } from './options.ts';
 import { renderRecords } from './render-records.ts';
@@ -24,6 +25,7 @@ export async function runFiles(
   const today = dayOf(options.asOf);
   // What is wrong with the call is said before anything is computed.
   const outputs = options.out.map((file) => ({ file, format: formatOfFile(file, options, RUN_FORMATS) }));
+  const settings = await pushSettings(options, context);
   const runs = await rollUpAll(files, options, context);
   if (!runs) return;
   const records = runs.flatMap((run) => run.records);
@@ -42,6 +44,34 @@ export async function runFiles(
     annotate(annotationsOfRecords(records, today, options.units), context);
     if (broken) context.status = EXIT.broken;
   }
+  if (settings) await push(runs, settings, context);
+}
+
+/** Where to push; null where that is not asked for. */
+async function pushSettings(options: RunOptions, context: Context): Promise<Settings | null> {
+  if (options.push) {
+    const { readSettings } = await import('../push/settings.ts');
+    return readSettings(options, context.io.env);
+  }
+  if (options.server === undefined && options.project === undefined && !options.insecure) return null;
+  throw new InputError([
+    {
+      code: 'CALL_PUSH',
+      message: 'expected --push beside the server or project to push to, found none',
+      hint: 'add --push, or leave --server, --project and --insecure out',
+    },
+  ]);
+}
+
+async function push(runs: readonly FileRun[], settings: Settings, context: Context): Promise<void> {
+  const { pack } = await import('../push/pack.ts');
+  const { findIn } = await import('../push/find-input.ts');
+  const { pushRecords } = await import('../push/push-records.ts');
+  const parcels = runs.flatMap(({ records, source }) => {
+    const find = findIn([source]);
+    return records.map((record) => pack(record, find));
+  });
+  await pushRecords(parcels, settings, context);
 }
 
 /** Rolls every file up; the faults of all are printed together, and then nothing else is. */

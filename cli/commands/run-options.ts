@@ -1,9 +1,12 @@
 import { type Command, Option } from 'commander';
+import type { PushOptions } from '../push/settings.ts';
 import { addOutputOptions, addRollUpOptions, type OutputOptions, type RollUpOptions } from './options.ts';
+import { addPushOptions } from './push-options.ts';
 
 export const RUN_FORMATS = ['table', 'json', 'ndjson', 'csv', 'markdown', 'junit'] as const;
 
-export interface RunOptions extends RollUpOptions, OutputOptions {
+export interface RunOptions extends RollUpOptions, OutputOptions, PushOptions {
+  push?: boolean;
   of?: string;
   frame?: string;
   about: string;
@@ -34,5 +37,6 @@ export function addRunOptions(command: Command): Command {
     .option('--parts <which>', 'all, or how many of the heaviest, in tables', '8')
     .option('--three-view <file.svg>', 'draw front, side and top with centre and principal axes')
     .option('--as-of <day>', 'the day on which waivers are judged, YYYY-MM-DD', undefined);
-  return addOutputOptions(command, RUN_FORMATS);
+  addOutputOptions(command, RUN_FORMATS).option('--push', 'send the records to the team server as well');
+  return addPushOptions(command);
 }

@@ -17,6 +17,7 @@ export interface Outcome {
 export class CliTest {
   readonly folder: string;
   private env: Record<string, string> = {};
+  private input: string | undefined;
 
   constructor() {
     this.folder = mkdtempSync(join(tmpdir(), 'steelyard-test-'));
@@ -36,6 +37,12 @@ export class CliTest {
     return this;
   }
 
+  /** What the command reads from standard input. */
+  withInput(text: string): this {
+    this.input = text;
+    return this;
+  }
+
   read(name: string): string {
     return readFileSync(join(this.folder, name), 'utf8');
   }
@@ -48,15 +55,21 @@ export class CliTest {
   }
 
   async steelyard(...args: string[]): Promise<Outcome> {
-    const { stdout, stderr, exitCode } = await execa(process.execPath, [COMMAND, ...args], {
+    const { stdout, stderr, exitCode } = await this.start(...args);
+    return { stdout, stderr, status: exitCode };
+  }
+
+  /** The process itself, for tests that send it signals. */
+  start(...args: string[]) {
+    return execa(process.execPath, [COMMAND, ...args], {
       cwd: this.folder,
       reject: false,
       stripFinalNewline: false,
       extendEnv: false,
       env: { PATH: process.env.PATH ?? '', HOME: this.folder, LANG: 'C.UTF-8', ...this.env },
       maxBuffer: 2 ** 28,
+      ...(this.input !== undefined && { input: this.input }),
     });
-    return { stdout, stderr, status: exitCode };
   }
 
   async json<T>(...args: string[]): Promise<T> {

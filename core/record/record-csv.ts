@@ -1,12 +1,5 @@
-import { plainText } from '../../../core/figures/index.ts';
-import type {
-  BodyRecord,
-  GroupTotals,
-  LimitResult,
-  PartRecord,
-  RollUpRecord,
-  Rows3,
-} from '../../../core/record/record.ts';
+import { csvCell as cell } from './csv-cell.ts';
+import type { BodyRecord, GroupTotals, LimitResult, PartRecord, RollUpRecord, Rows3 } from './record.ts';
 
 /** The columns, in an order that only ever grows at its end. SI units in the heads; figures to the last bit. */
 export const CSV_COLUMNS = [
@@ -164,12 +157,3 @@ const limitRow = (head: Row, limit: LimitResult): Row => ({
   file: limit.at.file,
   line: limit.at.line,
 });
-
-/** A text that a spreadsheet would run as a formula gets an apostrophe in front, as such programs themselves do. */
-function cell(value: string | number | boolean | null | undefined): string {
-  if (value === null || value === undefined) return '';
-  if (typeof value !== 'string') return String(value);
-  const plain = plainText(value);
-  const safe = /^\s*[=+\-@]/.test(plain) ? `'${plain}` : plain;
-  return /[",\r\n]/.test(safe) || safe !== safe.trim() ? `"${safe.replaceAll('"', '""')}"` : safe;
-}

@@ -1,0 +1,62 @@
+import type { Request } from 'express';
+import jwt from 'jsonwebtoken';
+import { Op } from 'sequelize';
+import type { Deps } from '../deps.ts';
+import { Person, Session, Token } from '../models/index.ts';
+import { ProblemError } from '../problem.ts';
+import { hashSecret } from '../services/secrets.ts';
+import type { Caller } from './caller.ts';
+
+export const COOKIE = 'steelyard_session';
+const MINUTE = 60_000;
+
+/**
+ * Who asks, by token or by session cookie; null where the request shows neither.
+ *
+ * @throws ProblemError 401 where what is shown does not hold
+ */
+export async function authenticate(request: Request, deps: Deps): Promise<Caller | null> {
+  const header = request.get('authorization');
+  if (header) return byToken(header);
+  const cookie = (request.cookies as Record<string, string>)[COOKIE];
+  return cookie ? bySession(cookie, deps) : null;
+}
+
+async function byToken(header: string): Promise<Caller> {
+  const secret = /^Bearer (\S+)$/i.exec(header)?.[1];
+  const token =
+    secret && (await Token.findOne({ where: { secretHash: hashSecret(secret) }, include: 'person' }));
+  const refuse = (found: string) =>
+    new ProblemError(401, 'TOKEN_NOT_VALID', `expected a valid token, found ${found}`, {
+      hint: 'make a new one on the page Tokens',
+    });
+  if (!token) throw refuse('one that this server does not know');
+  if (token.revokedAt) throw refuse('one that was revoked');
+  if (token.expiresAt.getTime() <= Date.now()) throw refuse('one that has expired');
+  const person = token.person!;
+  if (token.kind === 'person' && !person.active) throw refuse("one whose person's account is shut");
+  if (!token.lastUsedAt || Date.now() - token.lastUsedAt.getTime() > MINUTE)
+    await Token.update({ lastUsedAt: new Date() }, { where: { id: token.id } });
+  return { person, session: null, token };
+}
+
+async function bySession(cookie: string, { config }: Deps): Promise<Caller | null> {
+  let id: string;
+  try {
+    const claims = jwt.verify(cookie, config.SECRET, { algorithms: ['HS256'] });
+    id = (claims as { sid: string }).sid;
+  } catch {
+    return null;
+  }
+  const session = await Session.findOne({
+    where: { id, revokedAt: null, expiresAt: { [Op.gt]: new Date() } },
+  });
+  const person = session && (await Person.findByPk(session.personId));
+  if (!session || !person?.active) return null;
+  if (Date.now() - session.seenAt.getTime() > MINUTE) {
+    const now = new Date();
+    await Session.update({ seenAt: now }, { where: { id } });
+    await Person.update({ lastSeenAt: now }, { where: { id: person.id } });
+  }
+  return { person, session, token: null };
+}

@@ -1,0 +1,70 @@
+import { Op } from 'sequelize';
+import { inTransaction } from '../../database.ts';
+import { Session } from '../../models/index.ts';
+import { ProblemError } from '../../problem.ts';
+import { audit } from '../../services/audit.ts';
+import { checkPassword, hashPassword, isPassword } from '../../services/passwords.ts';
+import { openSession, revokeSessions } from '../../services/sessions.ts';
+import { noteWrongPassword, refuseGuessing } from '../../services/throttle.ts';
+import type { Handler } from '../route.ts';
+
+const showAccount: Handler<'showAccount'> = async ({ caller }) => {
+  const { person, session } = caller;
+  const sessions = await Session.findAll({
+    where: { personId: person.id, revokedAt: null, expiresAt: { [Op.gt]: new Date() } },
+    order: [['seenAt', 'DESC']],
+    limit: 50,
+  });
+  return {
+    name: person.name,
+    email: person.email,
+    mail: { limits: person.mailLimits, releases: person.mailReleases },
+    sessions: sessions.map((s) => ({
+      since: s.createdAt.toISOString(),
+      lastSeen: s.seenAt.toISOString(),
+      agent: s.agent,
+      here: s.id === session?.id,
+    })),
+  };
+};
+
+const changeAccount: Handler<'changeAccount'> = async ({ caller, body }) => {
+  const { name, mail } = body;
+  await caller.person.update({
+    ...(name !== undefined && { name }),
+    ...(mail && { mailLimits: mail.limits, mailReleases: mail.releases }),
+  });
+  return null;
+};
+
+/** All other sessions end: whoever had the old password is out. */
+const changePassword: Handler<'changePassword'> = async ({
+  caller,
+  body,
+  address,
+  request,
+  response,
+  deps,
+}) => {
+  const { person } = caller;
+  const { config } = deps;
+  await refuseGuessing(person.email, address);
+  if (!(await isPassword(body.current, person.passwordHash, config.PASSWORD_COST))) {
+    await noteWrongPassword(person.email, address);
+    throw new ProblemError(400, 'PASSWORD_WRONG', 'expected your password of now, found another', {
+      hint: 'if you forgot it, sign out and ask for a new one by mail',
+    });
+  }
+  checkPassword(body.password, person.email, person.name);
+  const passwordHash = await hashPassword(body.password, config.PASSWORD_COST);
+  await inTransaction(deps.sequelize, async (transaction) => {
+    await person.update({ passwordHash }, { transaction });
+    await revokeSessions(person.id, transaction);
+    const entry = { who: person.name, action: 'password.changed', project: null, address };
+    await audit({ ...entry, what: 'changed their password; other sessions ended' }, transaction);
+    await openSession(person, request, response, config, transaction);
+  });
+  return null;
+};
+
+export const accountRoutes = { showAccount, changeAccount, changePassword };
