@@ -1,22 +1,25 @@
-import { type RefObject, useLayoutEffect, useRef, useState } from 'react';
+import { useLayoutEffect, useRef, useState } from 'react';
 
-/** Where the poise hangs and how the arm is cut, in pixels from the masthead's left end. */
+/** Where the poise hangs (on its first notch where no page is marked) and how the arm is cut, in pixels from the masthead's left end. */
 interface Measure {
   readonly width: number;
   readonly fulcrum: number;
-  readonly poise: number | null;
+  /** Where the heavy end ends and the notches begin. */
+  readonly heavy: number;
+  readonly poise: number;
 }
 
 const HEAVY_END = 150;
 const NARROW = 720;
 
 /** The masthead's arm: short and heavy left of its fulcrum, notched and tapering to the right, the poise where you are. */
-export function Arm({ masthead, here }: { masthead: RefObject<HTMLElement | null>; here: string }) {
+export function Arm({ here }: { here: string }) {
+  const arm = useRef<SVGSVGElement>(null);
   const [measure, setMeasure] = useState<Measure | null>(null);
   const first = useRef(true);
   // biome-ignore lint/correctness/useExhaustiveDependencies: another place moves the poise.
   useLayoutEffect(() => {
-    const element = masthead.current;
+    const element = arm.current?.parentElement;
     if (!element) return;
     const look = () => setMeasure(measureOf(element));
     look();
@@ -28,33 +31,30 @@ export function Arm({ masthead, here }: { masthead: RefObject<HTMLElement | null
       gone = true;
       observer.disconnect();
     };
-  }, [here, masthead]);
+  }, [here]);
   useLayoutEffect(() => {
-    if (measure?.poise !== null && measure) requestAnimationFrame(() => (first.current = false));
+    if (measure) requestAnimationFrame(() => (first.current = false));
   }, [measure]);
-  if (!measure) return <svg className="arm" aria-hidden="true" />;
-  const { width, fulcrum, poise } = measure;
-  const heavy = width < NARROW ? 2 * fulcrum : HEAVY_END;
+  if (!measure) return <svg ref={arm} className="arm" aria-hidden="true" />;
+  const { width, fulcrum, heavy, poise } = measure;
   return (
-    <svg className="arm" aria-hidden="true">
+    <svg ref={arm} className="arm" aria-hidden="true">
       <path d={`M0 0H${width}V2.4L${heavy} 4.4H0z`} fill="var(--color-ink)" />
       <path d={notches(heavy + 12, width)} stroke="var(--color-paper)" strokeWidth="1.1" fill="none" />
       <path d={`M${fulcrum} 5l-8 14h16z`} fill="none" stroke="var(--color-ink)" strokeWidth="1.4" />
-      {poise !== null && (
-        <g
-          className="poise"
-          data-first={first.current ? '' : undefined}
-          style={{ transform: `translateX(${poise}px)` }}
-        >
-          <path d="M-4 0a4 4 0 1 1 8 0v3M0 4v8" stroke="var(--color-brass)" strokeWidth="2" fill="none" />
-          <path
-            d="M-7 12h14l5 17h-24z"
-            fill="var(--color-brass-fill)"
-            stroke="var(--color-ink)"
-            strokeWidth="1.2"
-          />
-        </g>
-      )}
+      <g
+        className="poise"
+        data-first={first.current ? '' : undefined}
+        style={{ transform: `translateX(${poise}px)` }}
+      >
+        <path d="M-4 0a4 4 0 1 1 8 0v3M0 4v8" stroke="var(--color-brass)" strokeWidth="2" fill="none" />
+        <path
+          d="M-7 12h14l5 17h-24z"
+          fill="var(--color-brass-fill)"
+          stroke="var(--color-ink)"
+          strokeWidth="1.2"
+        />
+      </g>
     </svg>
   );
 }
@@ -62,10 +62,14 @@ export function Arm({ masthead, here }: { masthead: RefObject<HTMLElement | null
 function measureOf(masthead: HTMLElement): Measure {
   const box = masthead.getBoundingClientRect();
   const here = masthead.querySelector('[data-here]')?.getBoundingClientRect();
+  const narrow = box.width < NARROW;
+  const fulcrum = narrow ? 12 : 64;
+  const heavy = narrow ? 2 * fulcrum : HEAVY_END;
   return {
     width: box.width,
-    fulcrum: box.width < NARROW ? 12 : 64,
-    poise: here ? Math.round(here.left + here.width / 2 - box.left) : null,
+    fulcrum,
+    heavy,
+    poise: Math.round(here ? here.left + here.width / 2 - box.left : heavy + 24),
   };
 }
 

@@ -1,4 +1,3 @@
-import { useRef } from 'react';
 import { Link, useLocation, useParams } from 'react-router-dom';
 import type { Session } from '#core/api/people.ts';
 import { useProjects } from '#web/api/projects.ts';
@@ -10,7 +9,6 @@ import { ProjectChooser } from './project-chooser.tsx';
 
 /** The name, where one can go, who is signed in; all standing on the arm of a steelyard. */
 export function Masthead({ session }: { session: Session | undefined }) {
-  const masthead = useRef<HTMLElement>(null);
   const { pathname } = useLocation();
   const person = session?.person ?? null;
   const projects = useProjects(person !== null).data ?? [];
@@ -19,7 +17,7 @@ export function Masthead({ session }: { session: Session | undefined }) {
   const places = person ? placesOf(project?.slug, person.administrator) : [];
   const here = places.find(({ is }) => is(pathname))?.name;
   return (
-    <header className="masthead" ref={masthead}>
+    <header className="masthead">
       <Link to={PATHS.projects} className="name">
         Steelyard
       </Link>
@@ -43,7 +41,7 @@ export function Masthead({ session }: { session: Session | undefined }) {
         {project && <ProjectChooser projects={projects} current={project} />}
         {session && <AccountMenu session={session} />}
       </div>
-      <Arm masthead={masthead} here={`${here} ${pathname} ${person?.id} ${project?.slug}`} />
+      <Arm here={`${here} ${pathname} ${person?.id} ${project?.slug}`} />
     </header>
   );
 }

@@ -20,7 +20,7 @@ export function Component() {
         {MEMBER_ROLES.map(({ role, may }, i) => (
           <span key={role}>
             {i > 0 && '; '}
-            {/^[aeiou]/.test(role) ? 'an' : 'a'} <b>{role}</b> {may}
+            {i === 0 ? 'A' : 'an'} <b>{role}</b> {may}
           </span>
         ))}
         .

@@ -37,7 +37,7 @@ export function Component() {
                   <>
                     {name}
                     {administrator && <b> · administrator</b>}
-                    {!active && <span className="soft"> · account shut</span>}
+                    {!active && <span className="soft font-normal"> · account shut</span>}
                   </>
                 ),
               },

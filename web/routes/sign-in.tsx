@@ -8,6 +8,7 @@ import { Field } from '#web/components/field.tsx';
 import { Form } from '#web/components/form.tsx';
 import { Notice } from '#web/components/notice.tsx';
 import { PageHead } from '#web/components/page-head.tsx';
+import { SectionHead } from '#web/components/section-head.tsx';
 import { useSessionHere } from '#web/hooks/use-session-here.ts';
 import { announce } from '#web/lib/announce.ts';
 import { exactTextOf, faultsOf, textOf } from '#web/lib/form-values.ts';
@@ -38,26 +39,29 @@ export function Component() {
       {search.has('to') && <Notice>To see the page you asked for, sign in first.</Notice>}
       {search.has('set') && <Notice kind="good">Your new password is set. Sign in with it.</Notice>}
       <div className="cols">
-        <Form
-          act="Sign in"
-          acting="Signing in…"
-          check={(values) =>
-            faultsOf({
-              email: textOf(values, 'email') === '' && 'Write the e-mail address of your account.',
-              password: exactTextOf(values, 'password') === '' && 'Write your password.',
-            })
-          }
-          submit={async (values) => {
-            const body = { email: textOf(values, 'email'), password: exactTextOf(values, 'password') };
-            enter(client, await request('signIn', { body }));
-          }}
-          beside={<Link to={PATHS.askReset}>Forgotten your password?</Link>}
-        >
-          <div ref={fields} className="grid w-full gap-[18px]">
-            <Field name="email" label="E-mail" type="email" autoComplete="username" />
-            <Field name="password" label="Password" type="password" autoComplete="current-password" />
-          </div>
-        </Form>
+        <section aria-labelledby="yours">
+          <SectionHead title="With your account" id="yours" />
+          <Form
+            act="Sign in"
+            acting="Signing in…"
+            check={(values) =>
+              faultsOf({
+                email: textOf(values, 'email') === '' && 'Write the e-mail address of your account.',
+                password: exactTextOf(values, 'password') === '' && 'Write your password.',
+              })
+            }
+            submit={async (values) => {
+              const body = { email: textOf(values, 'email'), password: exactTextOf(values, 'password') };
+              enter(client, await request('signIn', { body }));
+            }}
+            beside={<Link to={PATHS.askReset}>Forgotten your password?</Link>}
+          >
+            <div ref={fields} className="grid w-full gap-[18px]">
+              <Field name="email" label="E-mail" type="email" autoComplete="username" />
+              <Field name="password" label="Password" type="password" autoComplete="current-password" />
+            </div>
+          </Form>
+        </section>
         {session.demo && session.demoSignIns.length > 0 && (
           <DemoSignIns signIns={session.demoSignIns} fill={fill} />
         )}

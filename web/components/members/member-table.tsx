@@ -19,7 +19,7 @@ export function MemberTable({ project, members }: { project: Project; members: r
       cell: ({ name, active }) => (
         <>
           {name}
-          {!active && <span className="soft"> · account shut</span>}
+          {!active && <span className="soft font-normal"> · account shut</span>}
         </>
       ),
     },

@@ -32,9 +32,9 @@ export function RoleChanger({
     }
   };
   return (
-    <span className="inline inline-flex flex-wrap items-center gap-x-3">
+    <span className="inline-flex flex-wrap items-center gap-x-3">
       <select
-        className="entry w-auto!"
+        className="entry"
         aria-label={`Role of ${member.name}`}
         value={chosen}
         onChange={(event) => setChosen(event.target.value as Member['role'])}
