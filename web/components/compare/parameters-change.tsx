@@ -1,0 +1,50 @@
+import type { Difference, ValueChange } from '#core/difference/index.ts';
+import { formatShort, unitText } from '#core/figures/index.ts';
+import { ScrollRegion } from '#web/components/scroll-region.tsx';
+import { SectionHead } from '#web/components/section-head.tsx';
+import { signed } from './change-rows.ts';
+
+/** Parameters whose value differs. */
+export function ParametersChangeSection({ parameters }: Pick<Difference, 'parameters'>) {
+  return (
+    <section aria-labelledby="parameters">
+      <SectionHead title="Parameters" id="parameters">
+        {parameters.length === 0 ? 'none changed' : `${parameters.length} changed · SI`}
+      </SectionHead>
+      {parameters.length > 0 && (
+        <ScrollRegion label="Parameters">
+          <table className="max-w-3xl">
+            <caption className="sr-only">Parameters in A and in B, SI</caption>
+            <thead>
+              <tr>
+                <th scope="col">parameter</th>
+                <th scope="col" className="n">
+                  A
+                </th>
+                <th scope="col" className="n">
+                  B
+                </th>
+                <th scope="col" className="n">
+                  change
+                </th>
+              </tr>
+            </thead>
+            <tbody>
+              {parameters.map((p) => (
+                <tr key={p.name}>
+                  <th scope="row">{p.name}</th>
+                  <td className="n">{valueText(p.a)}</td>
+                  <td className="n">{valueText(p.b)}</td>
+                  <td className="n">{p.change === null ? '' : signed(formatShort(p.change))}</td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </ScrollRegion>
+      )}
+    </section>
+  );
+}
+
+const valueText = (value: ValueChange['a']): string =>
+  value === null ? '—' : `${formatShort(value.value)} ${unitText(value.unit)}`.trim();
