@@ -42,7 +42,7 @@ export class Patience {
 
   /** The longest that an exchange with a body of some bytes may take [ms]: a slow line of 100 kB/s is let finish. */
   timeoutOf(bytes: number): number {
-    return this.timeout + bytes / 100;
+    return this.timeout + Math.ceil(bytes / 100);
   }
 }
 

@@ -391,7 +391,7 @@ describe('steelyard push RECORD', () => {
     const test = pusher(server).file('wedge.yaml', WITH_MESH).file('wedge.stl', CUBE);
     await test.steelyard('run', 'wedge.yaml', '-o', 'wedge.json');
     const path = join(outside.folder, 'secret.stl');
-    test.file('wedge.json', test.read('wedge.json').replaceAll('wedge.stl', path)).file('wedge.stl', '');
+    test.file('wedge.json', test.read('wedge.json').replaceAll('"wedge.stl"', JSON.stringify(path))).file('wedge.stl', '');
     const { stderr } = await test.steelyard('push', 'wedge.json');
     expect(stderr).toContain('PUSH_INPUT_MISSING');
     expect(server.inputs.size).toBe(1);
