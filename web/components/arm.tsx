@@ -61,7 +61,7 @@ export function Arm({ here }: { here: string }) {
 
 function measureOf(masthead: HTMLElement): Measure {
   const box = masthead.getBoundingClientRect();
-  const here = masthead.querySelector('[data-here]')?.getBoundingClientRect();
+  const here = masthead.querySelector<HTMLElement>('[data-here]');
   const narrow = box.width < NARROW;
   const fulcrum = narrow ? 12 : 64;
   const heavy = narrow ? 2 * fulcrum : HEAVY_END;
@@ -69,8 +69,15 @@ function measureOf(masthead: HTMLElement): Measure {
     width: box.width,
     fulcrum,
     heavy,
-    poise: Math.round(here ? here.left + here.width / 2 - box.left : heavy + 24),
+    poise: here ? hookOf(here, box, narrow) : heavy + 24,
   };
+}
+
+/** Under the middle of what is marked; at the arm's end for what stands in another row than the arm's. */
+function hookOf(here: HTMLElement, box: DOMRect, narrow: boolean): number {
+  if (narrow && here.dataset.here === 'end') return box.width - 20;
+  const { left, width } = here.getBoundingClientRect();
+  return Math.round(left + width / 2 - box.left);
 }
 
 /** Notches that widen away from the fulcrum. */

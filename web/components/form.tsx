@@ -7,6 +7,7 @@ import {
   useRef,
   useState,
 } from 'react';
+import { fieldFaultsOf } from '#web/lib/field-faults.ts';
 import { Button } from './button.tsx';
 import { ProblemNotice } from './problem-notice.tsx';
 
@@ -68,7 +69,9 @@ export function Form({
     try {
       await submit(values, event.currentTarget);
     } catch (failure) {
-      setError(failure);
+      const ofFields = fieldFaultsOf(failure, values);
+      if (ofFields) setFaults(ofFields);
+      else setError(failure);
     } finally {
       setBusy(false);
     }

@@ -37,14 +37,25 @@ export function Masthead({ session }: { session: Session | undefined }) {
           ))}
         </ul>
       </nav>
-      <div className="who" data-here={person && here === undefined ? '' : undefined}>
-        {project && <ProjectChooser projects={projects} current={project} />}
-        {session && <AccountMenu session={session} />}
+      <div className="who">
+        {project && (
+          <div data-here={person && here === undefined && !OF_PERSON.includes(pathname) ? 'end' : undefined}>
+            <ProjectChooser projects={projects} current={project} />
+          </div>
+        )}
+        {session && (
+          <div data-here={person && OF_PERSON.includes(pathname) ? 'end' : undefined}>
+            <AccountMenu session={session} />
+          </div>
+        )}
       </div>
       <Arm here={`${here} ${pathname} ${person?.id} ${project?.slug}`} />
     </header>
   );
 }
+
+/** Pages that belong to whoever is signed in: the poise hangs under their name. */
+const OF_PERSON: readonly string[] = [PATHS.account, PATHS.mail];
 
 interface Place {
   readonly name: string;

@@ -34,8 +34,8 @@ export function Component() {
   return (
     <>
       <PageHead title="The mail is stopped">
-        No more mail of this kind comes to you. Invitations and links for a new password still do, when
-        somebody asks for them.
+        No more mail about limits and releases comes to you. Invitations and links for a new password still
+        do.
       </PageHead>
       <Choose />
     </>
@@ -45,7 +45,7 @@ export function Component() {
 function Choose() {
   return (
     <p className="acts">
-      <ActionLink kind="quiet" to={`${PATHS.account}#mail`}>
+      <ActionLink kind="quiet" to={PATHS.account}>
         Choose your mail in your account
       </ActionLink>
     </p>

@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
-import type { CreatedToken } from '#core/api/people.ts';
+import type { CreatedToken, Role } from '#core/api/people.ts';
 import { tokensQuery, useTokens } from '#web/api/tokens.ts';
 import { PageHead } from '#web/components/page-head.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
@@ -26,9 +26,7 @@ export function Component() {
         alone, expires, and is kept here only as a hash.
       </PageHead>
       {created && <TokenSecret created={created} project={project.slug} done={() => setCreated(null)} />}
-      <SectionHead title={project.role === 'administrator' ? 'Everybody’s tokens' : 'Your tokens'}>
-        revoked at once, everywhere
-      </SectionHead>
+      <SectionHead title={titleOf(project.role)}>revoked at once, everywhere</SectionHead>
       <View
         query={tokens}
         rows={3}
@@ -53,4 +51,10 @@ export function Component() {
       )}
     </>
   );
+}
+
+/** Machines' tokens are seen by those who may make them. */
+function titleOf(role: Role): string {
+  if (role === 'administrator') return 'Everybody’s';
+  return atLeast(role, 'engineer') ? 'Yours and the machines’' : 'Yours';
 }
