@@ -1,8 +1,8 @@
 import { InputError } from '#core/errors.ts';
 import { displayUnits } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
-import type { PartSelection } from '#core/record/select-part.ts';
 import { formatCsv } from '#core/record/record-csv.ts';
+import type { PartSelection } from '#core/record/select-part.ts';
 import { formatJson, formatNdjson } from '../output/formats/json.ts';
 import { formatJunit } from '../output/formats/junit.ts';
 import { formatMarkdown } from '../output/formats/markdown.ts';

@@ -1,9 +1,10 @@
-import { mkdirSync, readFileSync, renameSync, rmSync } from 'node:fs';
+import { readFileSync, renameSync, rmSync } from 'node:fs';
 import { basename, dirname, join } from 'node:path';
 import type { Fault } from '#core/errors.ts';
 import { writeWhole } from '../io.ts';
 import { claim, release } from './claim.ts';
 import type { About, Outgoing } from './outgoing.ts';
+import { makePrivateFolder } from './user-folders.ts';
 
 /** A record in the tray: a folder with `about.json`, `record.json`, `inputs/SHA-256`, and a `claim` while it is sent. */
 export class Kept implements Outgoing {
@@ -84,7 +85,7 @@ function move(folder: string, to: 'waiting' | 'refused'): void {
   const root = dirname(dirname(folder));
   release(folder);
   try {
-    mkdirSync(join(root, to), { recursive: true, mode: 0o700 });
+    makePrivateFolder(join(root, to));
     renameSync(folder, join(root, to, basename(folder)));
   } catch {
     // Gone already, or the disk may not be written to: then it stays where it is.

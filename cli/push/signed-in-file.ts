@@ -1,17 +1,8 @@
-import {
-  chmodSync,
-  closeSync,
-  existsSync,
-  fstatSync,
-  mkdirSync,
-  openSync,
-  readFileSync,
-  rmSync,
-} from 'node:fs';
+import { chmodSync, closeSync, existsSync, fstatSync, openSync, readFileSync, rmSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { InputError } from '#core/errors.ts';
 import { whyNotWritten, writeWhole } from '../io.ts';
-import { configFolder } from './user-folders.ts';
+import { configFolder, makePrivateFolder } from './user-folders.ts';
 
 /** What `steelyard sign-in` keeps. */
 export interface SignedIn {
@@ -49,7 +40,7 @@ export function writeSignedIn(signedIn: SignedIn, env: NodeJS.ProcessEnv): strin
   const path = signedInPath(env);
   const folder = dirname(path);
   try {
-    mkdirSync(folder, { recursive: true, mode: 0o700 });
+    makePrivateFolder(folder);
     chmodSync(folder, 0o700);
   } catch (error) {
     const message = `expected to write ${path}, found that ${whyNotWritten(error)}`;

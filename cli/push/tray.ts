@@ -1,7 +1,6 @@
 import {
   existsSync,
   linkSync,
-  mkdirSync,
   readdirSync,
   readFileSync,
   renameSync,
@@ -16,6 +15,7 @@ import { claimText, isClaimed } from './claim.ts';
 import { Kept } from './kept.ts';
 import { type About, byTurn } from './outgoing.ts';
 import type { Packed } from './pack.ts';
+import { makePrivateFolder } from './user-folders.ts';
 
 export type Where = 'waiting' | 'refused';
 
@@ -80,7 +80,7 @@ export class Tray {
     const folder = join(this.root, 'waiting', about.key);
     const part = `${folder}.part`;
     try {
-      mkdirSync(join(part, 'inputs'), { recursive: true, mode: 0o700 });
+      makePrivateFolder(join(part, 'inputs'));
       for (const { sha256, bytes } of packed.inputs) if (bytes) this.#putInput(part, sha256, bytes);
       writeFileSync(join(part, 'record.json'), packed.json);
       writeFileSync(join(part, 'about.json'), `${JSON.stringify(about, null, 2)}\n`);

@@ -1,6 +1,7 @@
 import { readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { describe, expect, it } from 'vitest';
+import { execa } from 'execa';
+import { describe, expect, it, onTestFinished } from 'vitest';
 import { BATCH_AT_MOST } from '../../../core/api/push.ts';
 import { CliTest } from '../../helpers/cli-test.ts';
 import { PushServer, problem, TOKEN } from '../../helpers/push-server.ts';
@@ -304,16 +305,36 @@ describe('run --push', () => {
     expect(await tray(test)).toHaveLength(2);
   });
 
-  it('sends from memory where the tray cannot be written, and says that nothing is kept', async () => {
+  it.each(['buoy.yaml/tray', '/proc/no-tray'])(
+    'sends from memory where the tray cannot be made, and says that nothing is kept: %s',
+    async (folder) => {
+      const server = await PushServer.start();
+      const test = pusher(server, { STEELYARD_TRAY: folder });
+      const sent = await test.steelyard('run', 'buoy.yaml', '--push');
+      expect([sent.status, server.runs.size]).toEqual([0, 2]);
+      expect(sent.stderr).toContain('TRAY_NOT_KEPT');
+      server.stop();
+      const lost = await test.steelyard('run', 'buoy.yaml', '--push', '--retries', '0');
+      expect(lost.status).toBe(3);
+      expect(lost.stderr).toContain('2 records neither sent nor kept');
+    },
+  );
+
+  it('says that the disk is full, keeps no half of a record, and sends all the same', async (context) => {
     const server = await PushServer.start();
-    const test = pusher(server, { STEELYARD_TRAY: '/proc/no-tray' });
-    const sent = await test.steelyard('run', 'buoy.yaml', '--push');
-    expect([sent.status, server.runs.size]).toEqual([0, 2]);
-    expect(sent.stderr).toContain('TRAY_NOT_KEPT');
-    server.stop();
-    const lost = await test.steelyard('run', 'buoy.yaml', '--push', '--retries', '0');
-    expect(lost.status).toBe(3);
-    expect(lost.stderr).toContain('2 records neither sent nor kept');
+    const test = pusher(server).file('tray/.keep', '');
+    const folder = join(test.folder, 'tray');
+    const mounted = await execa('mount', ['-t', 'tmpfs', '-o', 'size=16k', 'tmpfs', folder], {
+      reject: false,
+    });
+    if (mounted.failed) context.skip('a disk of 16 kB takes the right to mount one');
+    onTestFinished(async () => void (await execa('umount', [folder])));
+    const { status, stderr } = await test
+      .withEnv({ STEELYARD_TRAY: folder })
+      .steelyard('run', 'buoy.yaml', '--push');
+    expect([status, server.runs.size]).toEqual([0, 2]);
+    expect(stderr).toMatch(/TRAY_NOT_KEPT.*the disk\s+is full/s);
+    expect(readdirSync(join(folder, 'waiting'))).toEqual([]);
   });
 
   it('shows the token nowhere, not even where the server repeats it', async () => {
@@ -391,7 +412,9 @@ describe('steelyard push RECORD', () => {
     const test = pusher(server).file('wedge.yaml', WITH_MESH).file('wedge.stl', CUBE);
     await test.steelyard('run', 'wedge.yaml', '-o', 'wedge.json');
     const path = join(outside.folder, 'secret.stl');
-    test.file('wedge.json', test.read('wedge.json').replaceAll('"wedge.stl"', JSON.stringify(path))).file('wedge.stl', '');
+    test
+      .file('wedge.json', test.read('wedge.json').replaceAll('"wedge.stl"', JSON.stringify(path)))
+      .file('wedge.stl', '');
     const { stderr } = await test.steelyard('push', 'wedge.json');
     expect(stderr).toContain('PUSH_INPUT_MISSING');
     expect(server.inputs.size).toBe(1);
