@@ -1,7 +1,7 @@
 import { existsSync } from 'node:fs';
-import { dirname, join } from 'node:path';
-import { fileURLToPath } from 'node:url';
+import { join } from 'node:path';
 import { Piscina } from 'piscina';
+import { projectRoot } from '../project-root.ts';
 import type { RecomputeResult, RecomputeTask, UploadResult, UploadTask } from './tasks.ts';
 
 /** A task took more time or memory than it may, or its thread died of it. */
@@ -46,9 +46,9 @@ export function createComputer({ threads, seconds, megabytes }: Bounds): Compute
   return { recompute: run, rollUp: run, close: () => pool.destroy() };
 }
 
-/** Beside this file once built; from source, where the build puts it. */
+/** Threads load the built file, also where the server runs from source. */
 function threadFile(): string {
-  const here = dirname(fileURLToPath(import.meta.url));
-  const beside = join(here, 'thread.js');
-  return existsSync(beside) ? beside : join(here, '..', '..', 'dist', 'server', 'thread.js');
+  const file = join(projectRoot(), 'dist', 'server', 'thread.js');
+  if (!existsSync(file)) throw new Error(`expected ${file}, found none: npm run build`);
+  return file;
 }

@@ -34,5 +34,9 @@ export function initModel<M extends Model>(
   sequelize: Sequelize,
 ): void {
   const options: InitOptions<M> = { sequelize, tableName, underscored: true, timestamps: false };
-  model.init(attributes as never, options);
+  // Sequelize writes into what it is given; the kinds above are shared.
+  const own = Object.fromEntries(
+    Object.entries(attributes).map(([name, kind]) => [name, { ...(kind as object) }]),
+  );
+  model.init(own as never, options);
 }
