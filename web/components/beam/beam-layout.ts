@@ -27,46 +27,34 @@ const FIGURE = 8.1;
 const TIP_DEGREES = 2.4;
 /** The arm's end rises by no more than this, so that it stays clear of the row above. */
 const RISE = 10;
+/** Half of a poise at its foot. */
+const POISE = 9;
+
+/** Letters of the longest label at either end, so that the stops of a list stand under one another. */
+export interface LabelRoom {
+  readonly low: number;
+  readonly high: number;
+}
 
 /**
- * Lays a beam out in `width` pixels. A poise off the span is drawn to scale as far as half the span away; beyond, the
- * arm is broken and the poise hangs at its end.
- *
- * @param labels the printed stops, whose room is kept beside the span
+ * Lays a beam out in `width` pixels. The stops are at the same places whatever the value is; a poise off the span is
+ * drawn to scale as far as there is room, and beyond that the arm is broken and the poise hangs at its end.
  */
-export function layOutBeam(
-  beam: Beam,
-  labels: { low: string | null; high: string | null },
-  width: number,
-): BeamLayout {
-  const span = beam.high - beam.low;
-  const off =
-    beam.poise === null ? 0 : Math.max(0, beam.low - beam.poise, beam.poise - beam.high) / (span || 1);
-  const far = off > 0.5;
-  const room = (label: string | null, tips: boolean) =>
-    Math.max(width * 0.1, label === null ? 0 : label.length * FIGURE + 10) + (tips ? width * 0.04 : 0);
-  const left = EDGE + room(labels.low, beam.tips === 'low');
-  const right = width - EDGE - room(labels.high, beam.tips === 'high');
-  // Off the span the poise takes its share of the line, the span what is left.
-  const share = far ? 0.16 : off / (1 + off);
-  const line = Math.max(20, right - left);
-  const low = beam.tips === 'low' ? left + share * line : left;
-  const high = beam.tips === 'high' ? left + line - share * line : left + line;
-  const at = (value: number) => low + ((value - beam.low) / (span || 1)) * (high - low);
+export function layOutBeam(beam: Beam, labels: LabelRoom, width: number): BeamLayout {
+  const span = beam.high - beam.low || 1;
+  const room = (letters: number) => EDGE + Math.max(width * 0.12, letters * FIGURE + 8);
+  const low = room(labels.low);
+  const high = Math.max(low + 20, width - room(labels.high));
+  const at = (value: number) => low + ((value - beam.low) / span) * (high - low);
+  const [least, most] = [EDGE + POISE, width - EDGE - POISE];
+  const exact = beam.poise === null ? null : at(beam.poise);
+  const poise = exact === null ? null : Math.min(most, Math.max(least, exact));
+  const far = exact !== poise;
   const fulcrum = at(beam.fulcrum);
-  const poise =
-    beam.poise === null
-      ? null
-      : !far
-        ? at(beam.poise)
-        : beam.tips === 'low'
-          ? low - share * line
-          : high + share * line;
   const arm = Math.max(fulcrum - EDGE, width - EDGE - fulcrum);
   const angle = Math.min(TIP_DEGREES, (Math.asin(Math.min(1, RISE / arm)) * 180) / Math.PI);
   const tip = beam.tips === 'high' ? angle : beam.tips === 'low' ? -angle : 0;
   const drop = (x: number) => (x - fulcrum) * Math.sin((tip * Math.PI) / 180);
-  const breaks = poise !== null && far ? (poise + (beam.tips === 'low' ? low : high)) / 2 : null;
   return {
     width,
     height: 68,
@@ -75,7 +63,7 @@ export function layOutBeam(
     high,
     fulcrum,
     poise,
-    breaks,
+    breaks: poise !== null && far ? (poise + (beam.tips === 'low' ? low : high)) / 2 : null,
     tip,
     lowLabel: { x: low - 5, y: Y - 13 + drop(low) },
     highLabel: { x: high + 5, y: Y - 13 + drop(high) },

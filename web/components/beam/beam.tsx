@@ -2,7 +2,7 @@ import { useRef } from 'react';
 import { beamOf, type PrintedLimit } from '#core/figures/index.ts';
 import type { LimitResult } from '#core/record/record.ts';
 import { useWidth } from '#web/components/use-width.ts';
-import { layOutBeam } from './beam-layout.ts';
+import { type LabelRoom, layOutBeam } from './beam-layout.ts';
 
 const EDGE = 12;
 
@@ -11,20 +11,23 @@ const EDGE = 12;
  * tips to the side that is too heavy.
  *
  * @param baseline the released value [SI], where a one-sided beam has its fulcrum
+ * @param room letters of the longest labels in the list
  */
 export function BeamPicture({
   limit,
   printed,
   baseline,
+  room,
 }: {
   limit: Pick<LimitResult, 'value' | 'min' | 'max' | 'name'>;
   printed: PrintedLimit;
   baseline: number | null;
+  room: LabelRoom;
 }) {
   const frame = useRef<HTMLDivElement>(null);
   const width = useWidth(frame, 520);
   const beam = beamOf({ ...limit, baseline });
-  const at = layOutBeam(beam, { low: printed.min, high: printed.max }, Math.max(220, width));
+  const at = layOutBeam(beam, room, Math.max(220, width));
   const outside = beam.tips !== null;
   const tone = outside ? 'stroke-outside' : 'stroke-ink';
   return (

@@ -52,9 +52,9 @@ export function AttributionBars({
         {rows.map((row) => (
           <div
             key={row.path}
-            className="col-span-full grid grid-cols-subgrid items-center py-[5px] max-md:block"
+            className="col-span-full grid grid-cols-subgrid items-center max-md:block max-md:py-1.5"
           >
-            <div className="min-w-0 leading-tight md:text-right">
+            <div className="min-w-0 leading-tight md:py-2 md:text-right">
               <span className="break-words font-semibold">{row.path}</span>
               <span className="soft block text-sm max-md:ml-2 max-md:inline">
                 {happenedTo(row.contribution, difference, units)}
@@ -77,23 +77,25 @@ function Bar({ row, bars, width }: { row: AttributionRow; bars: Bars; width: num
   const { pieces, left, right } = barPieces(row.contribution, bars);
   const falls = row.contribution.total < 0;
   return (
-    <svg viewBox={`0 0 ${width} 38`} width="100%" className="block" aria-hidden="true">
-      <path d={`M${bars.zero} 0V38`} className="stroke-ink" strokeWidth="1.2" />
-      {pieces.map(({ cause, x, width: w }) => (
-        <rect
-          key={cause}
-          x={x}
-          y={6}
-          width={w}
-          height={26}
-          className={`${CLASS[cause]} stroke-ink`}
-          strokeWidth="1"
-        />
-      ))}
-      <text x={falls ? left - 9 : right + 9} y={24} textAnchor={falls ? 'end' : 'start'} className="fig">
-        {row.figures.total}
-      </text>
-    </svg>
+    <div className="relative self-stretch content-center">
+      <i className="absolute inset-y-0 w-[1.2px] bg-ink" style={{ left: bars.zero - 0.6 }} />
+      <svg viewBox={`0 0 ${width} 30`} width="100%" className="relative block" aria-hidden="true">
+        {pieces.map(({ cause, x, width: w }) => (
+          <rect
+            key={cause}
+            x={x}
+            y={2}
+            width={w}
+            height={26}
+            className={`${CLASS[cause]} stroke-ink`}
+            strokeWidth="1"
+          />
+        ))}
+        <text x={falls ? left - 9 : right + 9} y={20} textAnchor={falls ? 'end' : 'start'} className="fig">
+          {row.figures.total}
+        </text>
+      </svg>
+    </div>
   );
 }
 

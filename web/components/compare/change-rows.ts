@@ -28,6 +28,9 @@ export function unitOfQuantity({ unit }: Pick<QuantityChange, 'unit'>, units: Di
   return unit === 'rad' ? units.angle : units.inertia;
 }
 
+/** One more than elsewhere: a change is small beside what changes. */
+const DIGITS_COMPARED = 6;
+
 type Moved = Pick<QuantityChange, 'name' | 'unit' | 'a' | 'b' | 'ofA'>;
 
 /** Quantities of one kind share scale and decimals, so that rounding noise prints as zero. */
@@ -36,7 +39,10 @@ export function changeRows(quantities: readonly Moved[], units: DisplayUnits): C
     const kind = quantities.filter((other) => kindOf(other) === kindOf(q));
     const values = kind.flatMap((k) => [k.a ?? 0, k.b ?? 0]);
     const scale = scaleFor(unitOfQuantity(q, units), values, q.unit === 'kg*m^2' ? TENSOR_ROOM : PLAIN_ROOM);
-    const decimals = decimalsFor(values.map((x) => x / scale.factor));
+    const decimals = decimalsFor(
+      values.map((x) => x / scale.factor),
+      DIGITS_COMPARED,
+    );
     const print = (x: number | null) => formatFixed(x === null ? null : x / scale.factor, decimals);
     const [a, b] = [print(q.a), print(q.b)];
     return {

@@ -35,7 +35,7 @@ export function ParametersChangeSection({ parameters }: Pick<Difference, 'parame
                   <th scope="row">{p.name}</th>
                   <td className="n">{valueText(p.a)}</td>
                   <td className="n">{valueText(p.b)}</td>
-                  <td className="n">{p.change === null ? '' : signed(formatShort(p.change))}</td>
+                  <td className="n">{changeText(p)}</td>
                 </tr>
               ))}
             </tbody>
@@ -45,6 +45,9 @@ export function ParametersChangeSection({ parameters }: Pick<Difference, 'parame
     </section>
   );
 }
+
+const changeText = ({ change, b }: ValueChange): string =>
+  change === null ? '' : `${signed(formatShort(change))} ${unitText(b?.unit ?? '')}`.trim();
 
 const valueText = (value: ValueChange['a']): string =>
   value === null ? '—' : `${formatShort(value.value)} ${unitText(value.unit)}`.trim();

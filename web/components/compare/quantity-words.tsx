@@ -11,13 +11,13 @@ export function quantityWords(name: string): string {
   return which === '' ? kind : `${kind} ${which}`;
 }
 
-/** The same at the head of a table's row, the axes lowered. */
+/** At the head of a row in a table that says about which point, the axes lowered. */
 export function QuantityName({ name }: { name: string }) {
   const [kind = '', which = ''] = name.split('.');
   if (kind === 'inertia' || kind === 'origin')
     return (
       <>
-        I<sub>{which}</sub> {kind === 'inertia' ? 'about the centre' : 'about the origin'}
+        I<sub>{which}</sub>
       </>
     );
   const words = quantityWords(name);

@@ -69,8 +69,12 @@ export function RunsTable({
         </thead>
         <tbody role="rowgroup">
           {rows.map((row) => (
-            <tr key={row.id} role="row">
-              <td role="cell" data-label="compare">
+            <tr key={row.id} role="row" className="relative">
+              <td
+                role="cell"
+                data-label=""
+                className="max-[720px]:absolute max-[720px]:right-0 max-[720px]:top-2.5"
+              >
                 <input
                   type="checkbox"
                   aria-label={`choose ${runName(row)}, ${row.assembly}, ${row.state}`}
@@ -101,7 +105,7 @@ export function RunsTable({
                 <span>{centre.text(row.centre?.[0])}</span>
               </td>
               <td role="cell" className="n" data-label={`moments ${moments.scale.head}`}>
-                <span>{row.moments ? row.moments.map(moments.text).join(' · ') : '—'}</span>
+                <span>{row.moments ? <Moments texts={row.moments.map(moments.text)} /> : '—'}</span>
               </td>
               <td role="cell" data-label="verdict">
                 <span>
@@ -110,7 +114,7 @@ export function RunsTable({
                 </span>
               </td>
               <td role="cell" data-label="pushed by">
-                <span>{row.pushedBy}</span>
+                <span className="md:whitespace-nowrap">{row.pushedBy}</span>
               </td>
               <td role="cell" data-label="when">
                 <Time at={row.at} />
@@ -145,6 +149,15 @@ const UnitHead = ({ name, column }: { name: string; column: FigureColumn }) => (
     {name} <i>{column.scale.head}</i>
   </th>
 );
+
+const Moments = ({ texts }: { texts: readonly string[] }) =>
+  texts.map((text, i) => (
+    // biome-ignore lint/suspicious/noArrayIndexKey: in the order of size
+    <span key={i}>
+      {i > 0 && <span className="soft px-[0.35em] font-text">·</span>}
+      {text}
+    </span>
+  ));
 
 const ReleaseState = ({ row }: { row: RunRow }) => {
   if (row.release === 'released') return <ReleasedMark />;

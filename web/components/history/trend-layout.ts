@@ -4,6 +4,7 @@ import {
   formatFixed,
   formatShort,
   PLAIN_ROOM,
+  type Scale,
   scaleFor,
   unitText,
 } from '#core/figures/index.ts';
@@ -37,11 +38,20 @@ const TOP = 18;
 const FIGURE = 8;
 const LINE = 15;
 
+/** The unit in which a trend is shown, with its power of ten. */
+export function scaleOf({ shown, points }: Trend): Scale {
+  const unit = { text: unitText(shown.unit), factor: shown.factor };
+  return scaleFor(
+    unit,
+    points.map((p) => p.value),
+    PLAIN_ROOM,
+  );
+}
+
 /** Lays out one quantity over time in `width` × `height` pixels, y down. */
 export function layOutTrend(trend: Trend, width: number, height: number): TrendLayout {
-  const shown = { text: unitText(trend.shown.unit), factor: trend.shown.factor };
   const values = trend.points.map((p) => p.value);
-  const scale = scaleFor(shown, values, PLAIN_ROOM);
+  const scale = scaleOf(trend);
   const inScale = (x: number) => x / scale.factor;
   const figures = values.map(inScale);
   const decimals = decimalsFor(figures, 5);
@@ -57,7 +67,7 @@ export function layOutTrend(trend: Trend, width: number, height: number): TrendL
   );
   const bottom = height - 30;
   const up = (v: number) => bottom - ((v - span.low) / (span.high - span.low)) * (bottom - TOP);
-  const marks = niceTicks(span.low, span.high, Math.max(2, Math.round((bottom - TOP) / 48)));
+  const marks = niceTicks(span.low, span.high, Math.max(2, Math.round((bottom - TOP) / 36)));
   const ticks = marks.values.map((v) => ({ y: up(v), text: formatFixed(v, marks.decimals) }));
   const drawn = stops.filter((s) => s.value >= span.low && s.value <= span.high);
   const longest = (texts: string[]) => Math.max(2, ...texts.map((t) => t.length)) * FIGURE;
@@ -95,14 +105,19 @@ export function layOutTrend(trend: Trend, width: number, height: number): TrendL
   };
 }
 
-/** Labels that would touch the one before are left out. */
+/** Labels that would touch the one before are left out; at the edge the one before gives way. */
 function apart(times: { x: number; text: string }[]): { x: number; text: string }[] {
-  let end = -Infinity;
-  return times.filter(({ x, text }) => {
-    if (x < end) return false;
-    end = x + text.length * 7 + 12;
-    return true;
-  });
+  const end = ({ x, text }: { x: number; text: string }) => x + text.length * 7 + 12;
+  const kept: { x: number; text: string }[] = [];
+  for (const time of times) {
+    const before = kept.at(-1);
+    if (before && time.x < end(before)) {
+      if (kept.length > 1) continue;
+      kept.pop();
+    }
+    kept.push(time);
+  }
+  return kept;
 }
 
 /** Labels of stops that lie close together move apart; their lines do not. */

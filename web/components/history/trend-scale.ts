@@ -48,7 +48,7 @@ export function trendSpan(
 const HOUR = 3_600_000;
 const DAY = 24 * HOUR;
 
-/** Beginnings of days, months or years, local time, at most `count`, each with its label. */
+/** Beginnings of days, months or years, local time, about `count`, each with its label; the first stands at `from`. */
 export function timeTicks(from: number, to: number, count: number): { at: number; label: string }[] {
   const span = Math.max(1, to - from);
   const say = (options: Intl.DateTimeFormatOptions) => (d: Date) =>
@@ -86,7 +86,10 @@ function everyMonths(from: number, to: number, step: number, label: (d: Date) =>
 
 function walk(first: Date, from: number, to: number, next: (d: Date) => void, label: (d: Date) => string) {
   const ticks: { at: number; label: string }[] = [];
-  for (const d = first; d.getTime() <= to; next(d))
-    if (d.getTime() >= from) ticks.push({ at: d.getTime(), label: label(d) });
+  for (const d = first; d.getTime() <= to; next(d)) {
+    // The one that began before the picture stands at its edge, unless the next begins there as well.
+    if (d.getTime() <= from) ticks.length = 0;
+    ticks.push({ at: Math.max(from, d.getTime()), label: label(d) });
+  }
   return ticks;
 }

@@ -5,6 +5,7 @@ import { trendQuery } from '#web/api/trend.ts';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { Choice } from '#web/components/sentence/choice.tsx';
 import { type HistoryView, QUANTITY_WORDS } from './history-view.ts';
+import { scaleOf } from './trend-layout.ts';
 import { TrendPicture } from './trend-picture.tsx';
 import { TrendTable } from './trend-table.tsx';
 
@@ -32,7 +33,7 @@ export function TrendSection({
   return (
     <section aria-label="Trend">
       <SectionHead title={title}>
-        {trend.assembly}, {trend.state}
+        {scaleOf(trend).head} · {trend.assembly}, {trend.state}
         {trend.of > trend.points.length &&
           ` · ${trend.points.length} of ${trend.of} runs drawn, every extreme among them`}
         {' · show '}

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { Link, useLocation } from 'react-router-dom';
 
 export interface Place {
@@ -22,18 +23,18 @@ function safelyDecoded(hash: string): string {
   }
 }
 
-/** `drone.yaml:58` as a link to that line of the inputs below; the folders only where they are asked for. */
-export function FilePlace({ at, whole = false }: { at: Place; whole?: boolean }) {
+/** `drone.yaml:58`, or other words, as a link to that line of the inputs below; the folders stand in its title. */
+export function FilePlace({ at, children }: { at: Place; children?: ReactNode }) {
   const { search } = useLocation();
-  const name = whole ? at.file : at.file.slice(at.file.lastIndexOf('/') + 1);
+  const name = at.file.slice(at.file.lastIndexOf('/') + 1);
   return (
     <Link
       to={{ search, hash: encodeURI(lineAnchor(at)) }}
       preventScrollReset
-      className="code whitespace-nowrap"
+      className={children === undefined ? 'code whitespace-nowrap' : ''}
       title={`${at.file}:${at.line}`}
     >
-      {name}:{at.line}
+      {children ?? `${name}:${at.line}`}
     </Link>
   );
 }

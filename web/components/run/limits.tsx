@@ -1,12 +1,15 @@
-import { formatSignificant, printLimit, unitOfLimit, unitText } from '#core/figures/index.ts';
+import { formatSignificant, type PrintedLimit, printLimit, unitOfLimit } from '#core/figures/index.ts';
 import type { LimitResult, RollUpRecord } from '#core/record/record.ts';
 import { BeamPicture } from '#web/components/beam/beam.tsx';
+import type { LabelRoom } from '#web/components/beam/beam-layout.ts';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { VerdictMark } from '#web/components/verdict-mark.tsx';
 import { FilePlace } from './file-place.tsx';
 import type { RunView } from './run-view.ts';
 import { todayText, waiverState } from './waiver-state.ts';
 
+/** How many parts are named for a broken limit. */
+const HEAVIEST = 3;
 const CELL = 'max-md:block max-md:border-0 max-md:p-0';
 
 /** Every limit as a beam with its verdict and its margin; on a narrow screen the beam stands under the name. */
@@ -22,6 +25,9 @@ export function LimitsSection({
 }) {
   const { limits } = record;
   const judged = [...new Set(limits.map((l) => l.on))];
+  const printed = limits.map((limit) => printLimit(limit, unitOfLimit(limit, view.units)));
+  const longest = (labels: (string | null)[]) => Math.max(0, ...labels.map((text) => text?.length ?? 0));
+  const room = { low: longest(printed.map((p) => p.min)), high: longest(printed.map((p) => p.max)) };
   return (
     <section aria-labelledby="limits">
       <SectionHead title="Limits" id="limits">
@@ -51,10 +57,12 @@ export function LimitsSection({
           </thead>
           {/* biome-ignore lint/a11y/noRedundantRoles: reflow sets display. */}
           <tbody role="rowgroup" className="max-md:block">
-            {limits.map((limit) => (
+            {limits.map((limit, i) => (
               <LimitRow
                 key={`${limit.id} ${limit.name} ${limit.at.file} ${limit.at.line}`}
                 limit={limit}
+                printed={printed[i]!}
+                room={room}
                 view={view}
                 baseline={baseline[limit.name] ?? null}
                 sayOn={judged.length > 1}
@@ -69,16 +77,19 @@ export function LimitsSection({
 
 function LimitRow({
   limit,
+  printed,
+  room,
   view,
   baseline,
   sayOn,
 }: {
   limit: LimitResult;
+  printed: PrintedLimit;
+  room: LabelRoom;
   view: RunView;
   baseline: number | null;
   sayOn: boolean;
 }) {
-  const printed = printLimit(limit, unitOfLimit(limit, view.units));
   const waiver = waiverState(limit, todayText());
   return (
     // biome-ignore-start lint/a11y/noRedundantRoles: reflow sets display, which removes a table's own roles.
@@ -87,20 +98,20 @@ function LimitRow({
       role="row"
       className="align-middle max-md:grid max-md:grid-cols-[1fr_auto] max-md:gap-x-4 max-md:border-b max-md:border-rule max-md:py-3"
     >
-      <th role="rowheader" scope="row" className={`w-[17%] align-middle ${CELL}`}>
+      <th role="rowheader" scope="row" className={`md:w-[16%] align-middle ${CELL}`}>
         {limit.name} <span className="u">{printed.unit}</span>
         <span className="soft block whitespace-normal text-sm">{aimOf(limit, sayOn)}</span>
       </th>
       <td
         role="cell"
-        className={`n w-[9%] align-middle ${limit.verdict === 'outside' ? 'outside' : ''} ${CELL}`}
+        className={`n md:w-[8%] align-middle ${limit.verdict === 'outside' ? 'outside' : ''} ${CELL}`}
       >
         {printed.value}
       </td>
-      <td role="cell" className={`w-[42%] align-middle max-md:col-span-2 max-md:max-w-xl ${CELL}`}>
-        <BeamPicture limit={limit} printed={printed} baseline={baseline} />
+      <td role="cell" className={`md:w-[40%] align-middle max-md:col-span-2 max-md:max-w-xl ${CELL}`}>
+        <BeamPicture limit={limit} printed={printed} baseline={baseline} room={room} />
       </td>
-      <td role="cell" className={`w-[9%] align-middle ${CELL}`}>
+      <td role="cell" className={`md:w-[8%] align-middle ${CELL}`}>
         <VerdictMark verdict={limit.verdict} />
       </td>
       <td role="cell" className={`align-middle max-md:col-span-2 ${CELL}`}>
@@ -148,11 +159,11 @@ function Details({ limit, view }: { limit: LimitResult; view: RunView }) {
       {heaviest.length > 0 && (
         <span className="block">
           weighs most:{' '}
-          {heaviest.map((part, i) => (
+          {heaviest.slice(0, HEAVIEST).map((part, i) => (
             <span key={part.path}>
-              {i > 0 && ', then '}
-              {part.path} {formatSignificant(part.value / unit.factor, 4)} {unitText(unit.text)} (
-              <FilePlace at={part.at} />)
+              {i > 0 && ', '}
+              <FilePlace at={part.at}>{part.path}</FilePlace> {formatSignificant(part.value / unit.factor, 4)}{' '}
+              {unit.text}
             </span>
           ))}
         </span>
