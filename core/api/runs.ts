@@ -138,9 +138,9 @@ const may = z.object({ allowed: z.boolean(), why: z.string().nullable() });
 
 export const runDetailSchema = z.object({
   run: runRowSchema,
-  record: z
-    .custom<RollUpRecord>()
-    .describe('as `steelyard run --format json` prints it; inputs without their text'),
+  record: (z.looseObject({}) as unknown as z.ZodType<RollUpRecord>).describe(
+    'as `steelyard run --format json` prints it; inputs without their text',
+  ),
   baseline: runRowSchema
     .nullable()
     .describe('the latest released run of the assembly and state before this one'),
@@ -177,7 +177,9 @@ export const comparisonQuerySchema = z.object({
 export const comparisonSchema = z.object({
   a: runRowSchema,
   b: runRowSchema,
-  difference: z.custom<Difference>().describe('as `steelyard diff --format json` prints it'),
+  difference: (z.looseObject({}) as unknown as z.ZodType<Difference>).describe(
+    'as `steelyard diff --format json` prints it',
+  ),
   texts: z
     .array(z.object({ path: z.string(), patch: z.string() }))
     .describe('unified differences of the inputs that changed'),

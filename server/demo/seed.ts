@@ -32,6 +32,8 @@ export async function seedDemo(deps: Deps, tell: (line: string) => void): Promis
   if ((await Project.count()) > 0) return;
   const people = await makePeople(deps);
   const project = await Project.create({ slug: UNFINISHED, name: 'Petrel' });
+  // Under its name of later, which stands in mail.
+  project.slug = SLUG;
   const callers = await makeCallers(project, people);
   const files = apply(readExamples(), BEGINNING);
   const start = Date.now();
@@ -40,7 +42,7 @@ export async function seedDemo(deps: Deps, tell: (line: string) => void): Promis
     apply(files, commit.edits);
     await pushCommit(commit, i, files, { project, people, callers, start }, deps);
   }
-  await project.update({ slug: SLUG });
+  await Project.update({ slug: SLUG }, { where: { id: project.id } });
 }
 
 interface Stage {
