@@ -9,6 +9,7 @@ import type { Tray } from './tray.ts';
 
 /** Lines about records that arrived; more are counted. */
 const LINES_AT_MOST = 10;
+const INPUT_MISSING = 'PUSH_INPUT_MISSING';
 
 /** Says on stderr what became of the records, and sets the exit status where nothing worse has set it. */
 export async function report(
@@ -23,7 +24,7 @@ export async function report(
     for (const line of linesOfSent(outcome.sent, settings)) say(line);
     for (const path of outcome.without)
       say(
-        `warning PUSH_INPUT_MISSING: ${path} is not on the server, and was not found as it was rolled up; that run cannot be recomputed there`,
+        `warning ${INPUT_MISSING}: ${path} is not on the server, and was not found as it was rolled up; that run cannot be recomputed there`,
       );
     if (outcome.elsewhere > 0) say(`${count(outcome.elsewhere)} left to another process that sends them`);
   }

@@ -25,7 +25,7 @@ export interface Settings {
 /**
  * Server, project and token: options go before the environment, and that before the signed-in file.
  *
- * @throws InputError CALL_SERVER, CALL_PROJECT, CALL_TOKEN, SIGN_IN_FILE_DAMAGED, SIGN_IN_FILE_OPEN
+ * @throws InputError CALL_SERVER, CALL_PROJECT, CALL_TOKEN, FILE_SIGN_IN_DAMAGED, FILE_OPEN_TO_OTHERS
  */
 export function readSettings(options: PushOptions, env: NodeJS.ProcessEnv): Settings {
   const needsFile =

@@ -16,7 +16,7 @@ export const signedInPath = (env: NodeJS.ProcessEnv): string => join(configFolde
 /**
  * The signed-in file; null where nobody has signed in.
  *
- * @throws InputError SIGN_IN_FILE_OPEN where others may read it, SIGN_IN_FILE_DAMAGED
+ * @throws InputError FILE_OPEN_TO_OTHERS where others may read it, FILE_SIGN_IN_DAMAGED
  */
 export function readSignedIn(env: NodeJS.ProcessEnv): SignedIn | null {
   const path = signedInPath(env);
@@ -62,7 +62,7 @@ function refuseIfOpen(mode: number, path: string): void {
   if (process.platform === 'win32' || (mode & 0o077) === 0) return;
   throw new InputError([
     {
-      code: 'SIGN_IN_FILE_OPEN',
+      code: 'FILE_OPEN_TO_OTHERS',
       message: `expected a file that only its owner may read, found ${path} with permissions ${(mode & 0o777).toString(8)}`,
       hint: `others may have read the token: revoke it in the dashboard, then \`steelyard sign-in --forget\` and sign in again; or \`chmod 600 ${path}\``,
     },
@@ -83,7 +83,7 @@ function parse(text: string, path: string): SignedIn {
 const damaged = (path: string, why: string): InputError =>
   new InputError([
     {
-      code: 'SIGN_IN_FILE_DAMAGED',
+      code: 'FILE_SIGN_IN_DAMAGED',
       message: `expected server, project and token in ${path}, found that ${why}`,
       hint: 'sign in again with `steelyard sign-in`, or remove it with `steelyard sign-in --forget`',
     },

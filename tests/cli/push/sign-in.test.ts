@@ -65,7 +65,7 @@ describe('steelyard sign-in', () => {
     chmodSync(join(test.folder, FILE), 0o640);
     for (const args of [['run', 'one.yaml', '--push'], ['sign-in']]) {
       const { status, stderr } = await test.steelyard(...args);
-      expect([status, stderr]).toEqual([2, expect.stringContaining('SIGN_IN_FILE_OPEN')]);
+      expect([status, stderr]).toEqual([2, expect.stringContaining('FILE_OPEN_TO_OTHERS')]);
     }
     expect((await test.steelyard('sign-in', '--forget')).status).toBe(0);
     expect(existsSync(join(test.folder, FILE))).toBe(false);
@@ -76,7 +76,7 @@ describe('steelyard sign-in', () => {
     const test = await signedIn(server);
     test.file(FILE, `{ "token": "${TOKEN}"`);
     const { status, stderr } = await test.steelyard('run', 'one.yaml', '--push');
-    expect([status, stderr]).toEqual([2, expect.stringContaining('SIGN_IN_FILE_DAMAGED')]);
+    expect([status, stderr]).toEqual([2, expect.stringContaining('FILE_SIGN_IN_DAMAGED')]);
     expect(stderr).not.toContain(TOKEN);
   });
 
