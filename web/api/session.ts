@@ -1,5 +1,6 @@
-import { type QueryClient, useQuery, useQueryClient } from '@tanstack/react-query';
+import { type QueryClient, useQuery } from '@tanstack/react-query';
 import type { Session } from '#core/api/people.ts';
+import { PATHS } from '#web/paths.ts';
 import { queryOf, request } from './client.ts';
 
 export const sessionQuery = { ...queryOf('showSession'), staleTime: 60_000 };
@@ -13,14 +14,15 @@ export function enter(client: QueryClient, session: Session): void {
   client.setQueryData(sessionQuery.queryKey, session);
 }
 
-/** Ends the session here, or all of one's sessions. */
-export function useSignOut() {
-  const client = useQueryClient();
-  return async (everywhere = false) => {
-    await request(everywhere ? 'signOutEverywhere' : 'signOut');
-    client.removeQueries({ predicate: (query) => query.queryKey[0] !== 'showSession' });
-    await client.invalidateQueries({ queryKey: sessionQuery.queryKey });
-  };
+/**
+ * Ends the session here, or all of one's sessions, and loads the sign-in page anew: nothing that was shown stays in
+ * this page's memory.
+ *
+ * @throws ApiProblem where the server did not do it
+ */
+export async function signOut(everywhere = false): Promise<void> {
+  await request(everywhere ? 'signOutEverywhere' : 'signOut');
+  location.assign(PATHS.signIn);
 }
 
 /** Runs a prefetch once it is known that someone is signed in; for loaders that must not wait. */

@@ -1,21 +1,18 @@
+import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Session } from '#core/api/people.ts';
 import { asProblem } from '#web/api/api-problem.ts';
-import { useSignOut } from '#web/api/session.ts';
-import { announce } from '#web/lib/announce.ts';
+import { signOut } from '#web/api/session.ts';
+import { asSentence } from '#web/lib/sentence.ts';
 import { PATHS } from '#web/paths.ts';
 import { Disclosure } from './disclosure.tsx';
 import { ThemeSwitch } from './theme-switch.tsx';
 
 /** Who is signed in: account, theme, sign out; the demo's mail where the server shows it. */
 export function AccountMenu({ session }: { session: Session }) {
-  const signOut = useSignOut();
+  const [fault, setFault] = useState<string | null>(null);
   const person = session.person;
-  const leave = () =>
-    signOut().then(
-      () => announce('Signed out'),
-      (error: unknown) => announce(asProblem(error).detail),
-    );
+  const leave = () => signOut().catch((error: unknown) => setFault(asSentence(asProblem(error).detail)));
   return (
     <Disclosure label={person?.name ?? 'Theme'} name={person ? `${person.name}: your account` : undefined}>
       {(close) => (
@@ -46,6 +43,7 @@ export function AccountMenu({ session }: { session: Session }) {
               <button type="button" onClick={() => void leave()}>
                 Sign out
               </button>
+              {fault !== null && <p role="alert">{fault}</p>}
             </>
           )}
         </>

@@ -1,6 +1,7 @@
 import { type ReactNode, useEffect, useRef, useState } from 'react';
 import { asProblem } from '#web/api/api-problem.ts';
 import { announce } from '#web/lib/announce.ts';
+import { asSentence } from '#web/lib/sentence.ts';
 import { Button } from './button.tsx';
 
 /** A button that asks once, in its own place, before it does what is hard to undo. */
@@ -43,7 +44,7 @@ export function Confirm({
       if (done !== undefined) announce(done);
       setAsking(false);
     } catch (error) {
-      setFault(asProblem(error).detail);
+      setFault(asSentence(asProblem(error).detail));
     } finally {
       setBusy(false);
     }

@@ -1,5 +1,6 @@
 import type { Ref } from 'react';
 import { asProblem } from '#web/api/api-problem.ts';
+import { asSentence } from '#web/lib/sentence.ts';
 import { Button } from './button.tsx';
 import { Notice } from './notice.tsx';
 
@@ -16,8 +17,8 @@ export function ProblemNotice({
   const problem = asProblem(error);
   return (
     <Notice kind="bad" title={problem.title} ref={ref}>
-      <p>{problem.detail}</p>
-      {problem.hint !== undefined && <p>{problem.hint}</p>}
+      <p>{asSentence(problem.detail)}</p>
+      {problem.hint !== undefined && <p>{asSentence(problem.hint)}</p>}
       <p className="soft code">
         {problem.code}
         {problem.requestId !== undefined && ` · request ${problem.requestId}`}

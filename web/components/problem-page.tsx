@@ -1,4 +1,5 @@
 import { asProblem } from '#web/api/api-problem.ts';
+import { asSentence } from '#web/lib/sentence.ts';
 import { PATHS } from '#web/paths.ts';
 import { ActionLink } from './button.tsx';
 import { PageHead } from './page-head.tsx';
@@ -16,7 +17,9 @@ export function NotFound({ detail }: { detail?: string }) {
   return (
     <>
       <PageHead title="Nothing hangs here">
-        {detail ?? 'No page has this address. It may have been mistyped, or what it led to was removed.'}
+        {detail !== undefined
+          ? asSentence(detail)
+          : 'No page has this address. It may have been mistyped, or what it led to was removed.'}
       </PageHead>
       <p className="acts">
         <ActionLink to={PATHS.projects}>To your projects</ActionLink>
@@ -29,8 +32,8 @@ export function NoPermission({ detail, hint }: { detail?: string | undefined; hi
   return (
     <>
       <PageHead title="Not yours to see">
-        <p>{detail ?? 'Your role does not reach this page.'}</p>
-        <p>{hint ?? 'An administrator gives roles: ask one of yours.'}</p>
+        <p>{asSentence(detail ?? 'Your role does not reach this page')}</p>
+        <p>{asSentence(hint ?? 'An administrator gives roles: ask one of yours')}</p>
       </PageHead>
       <p className="acts">
         <ActionLink to={PATHS.projects}>To your projects</ActionLink>

@@ -1,4 +1,5 @@
 import { ApiProblem } from '#web/api/api-problem.ts';
+import { asSentence } from './sentence.ts';
 
 /** Refusals that are about one field of a form, by the server's code. */
 const FIELD_OF: Readonly<Record<string, string>> = {
@@ -30,5 +31,5 @@ export function fieldFaultsOf(error: unknown, values: FormData): Record<string, 
 const sentences = (...texts: readonly (string | undefined)[]): string =>
   texts
     .filter((text) => text !== undefined && text !== '')
-    .map((text) => `${text!.charAt(0).toUpperCase()}${text!.slice(1)}${/[.!?]$/.test(text!) ? '' : '.'}`)
+    .map((text) => asSentence(text!))
     .join(' ');

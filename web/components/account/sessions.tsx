@@ -1,5 +1,5 @@
 import type { Account } from '#core/api/people.ts';
-import { useSignOut } from '#web/api/session.ts';
+import { signOut } from '#web/api/session.ts';
 import { Confirm } from '#web/components/confirm.tsx';
 import { DataTable } from '#web/components/data-table.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
@@ -7,7 +7,6 @@ import { Time } from '#web/components/time.tsx';
 
 /** Where one is signed in, and the way to end it all. */
 export function Sessions({ sessions }: { sessions: Account['sessions'] }) {
-  const signOut = useSignOut();
   return (
     <section aria-labelledby="sessions">
       <SectionHead title="Where you are signed in" id="sessions">

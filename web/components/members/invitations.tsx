@@ -45,7 +45,7 @@ export function Invitations({ project }: { project: Project }) {
                   key: 'expires',
                   head: 'holds until',
                   cell: ({ expiresAt, state }) =>
-                    state === 'expired' ? <span className="outside">expired</span> : <Time at={expiresAt} />,
+                    state === 'expired' ? <span className="soft">expired</span> : <Time at={expiresAt} />,
                 },
                 {
                   key: 'acts',

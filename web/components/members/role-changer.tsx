@@ -5,6 +5,7 @@ import { request } from '#web/api/client.ts';
 import { Button } from '#web/components/button.tsx';
 import { announce } from '#web/lib/announce.ts';
 import { MEMBER_ROLES } from '#web/lib/roles.ts';
+import { asSentence } from '#web/lib/sentence.ts';
 
 /** A member's role, and a button that gives another once another is chosen. */
 export function RoleChanger({
@@ -28,7 +29,7 @@ export function RoleChanger({
       await changed();
       announce(`${member.name} is now ${chosen}`);
     } catch (error) {
-      setFault(asProblem(error).detail);
+      setFault(asSentence(asProblem(error).detail));
     }
   };
   return (

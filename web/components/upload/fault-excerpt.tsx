@@ -33,7 +33,6 @@ export function FaultExcerpt({
             <span key={number} className={number === line ? 'blamed-line' : 'soft'}>
               <span className="soft">{String(number).padStart(width)} | </span>
               {number === line ? <Blamed text={text} column={column} length={length} /> : printable(text)}
-              {'\n'}
             </span>
           );
         })}
