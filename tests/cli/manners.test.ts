@@ -20,15 +20,21 @@ describe('the command line', () => {
     expect([stdout, status]).toEqual([`${version}\n`, 0]);
   });
 
-  it.each([['--help'], ['run', '--help'], ['check', '--help'], ['diff', '--help'], ['why', '--help'], []])(
-    'says what it takes: %s %s',
-    async (...args) => {
-      const { stdout, stderr } = await new CliTest().steelyard(...args);
-      expect(stdout + stderr).toContain('Usage: steelyard');
-      for (const line of (stdout + stderr).split('\n'))
-        expect([...line].length, line).toBeLessThanOrEqual(80);
-    },
-  );
+  it.each([
+    ['--help'],
+    ['run', '--help'],
+    ['check', '--help'],
+    ['diff', '--help'],
+    ['why', '--help'],
+    ['push', '--help'],
+    ['tray', '--help'],
+    ['sign-in', '--help'],
+    [],
+  ])('says what it takes: %s %s', async (...args) => {
+    const { stdout, stderr } = await new CliTest().steelyard(...args);
+    expect(stdout + stderr).toContain('Usage: steelyard');
+    for (const line of (stdout + stderr).split('\n')) expect([...line].length, line).toBeLessThanOrEqual(80);
+  });
 
   it.each([
     [['rnu', 'x.yaml'], /did you mean/i],

@@ -452,7 +452,7 @@ describe('steelyard push RECORD', () => {
     const { stdout } = await test.steelyard('run', 'buoy.yaml', '--format', 'ndjson');
     const line = stdout.split('\n')[0]!;
     const count = 2 * BATCH_AT_MOST + 5;
-    const lines = Array.from({ length: count }, (_, i) => line.replace('"at":"2', `"run":${i},"at":"2`));
+    const lines = Array.from({ length: count }, () => line);
     test.file(
       'many.ndjson',
       lines
@@ -492,7 +492,7 @@ describe('the tray', () => {
     expect(stderr).toContain('2 records waiting for project heron');
   });
 
-  it('loses and doubles nothing where two processes send it at once', async () => {
+  it('loses and doubles nothing where several processes send it at once', async () => {
     const test = pusher(await nobody());
     await test.steelyard('run', 'buoy.yaml', '--push', '--retries', '0');
     const server = await PushServer.start();
@@ -508,6 +508,7 @@ describe('the tray', () => {
     const both = await Promise.all([0, 1, 2].map(() => test.steelyard('push', '--redirect')));
     expect(both.map((one) => one.status)).toEqual([0, 0, 0]);
     expect(server.runs.size).toBe(122);
+    expect(new Set(server.pushes.values())).toEqual(new Set([1]));
     expect(await tray(test)).toEqual([]);
   });
 

@@ -40,6 +40,13 @@ describe('assemblyJsonSchema', () => {
     expect(check.safeParse(parse(HERON)).error?.issues).toBeUndefined();
   });
 
+  it('demands a mesh’s file and unit, and one state where there are states', () => {
+    const solids = (part.solid!.anyOf as unknown as Json[])[1]!.properties!;
+    expect(solids.mesh!.required).toEqual(['file', 'unit']);
+    expect(schema.properties!.states!.minProperties).toBe(1);
+    expect(schema.properties!.states!.description).toContain('nominal');
+  });
+
   it('refuses an unknown key', () => {
     const check = z.fromJSONSchema(schema as never);
     expect(check.safeParse({ ...parse(HERON), junk: 1 }).success).toBe(false);

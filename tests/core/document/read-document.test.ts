@@ -166,6 +166,8 @@ describe('readDocument refuses', () => {
       'solid: { mesh: { file: a.stl, unit: mm, thickness: 3 } }',
       '4:45 MODEL_KEYS_CLASH',
     ],
+    ['a mesh without its unit', 'solid: { mesh: { file: a.stl } }', '4:20 MODEL_MISSING_KEY'],
+    ['a mesh without its file', 'solid: { mesh: { unit: mm } }', '4:20 MODEL_MISSING_KEY'],
     ['no states at all', 'solid: particle\n    states: []', '5:13 MODEL_WRONG_SHAPE'],
     ['parts that are nothing', 'parts:', '4:5 MODEL_WRONG_SHAPE'],
     [
@@ -207,6 +209,7 @@ describe('readDocument refuses', () => {
     ['no parts', 'assembly: a\nparts: []', '2:8 MODEL_WRONG_SHAPE'],
     ['a part that is text', 'assembly: a\nparts: [ boom ]', '2:10 MODEL_WRONG_SHAPE'],
     ['parts in a mapping', 'assembly: a\nparts: { boom: { solid: particle } }', '2:8 MODEL_WRONG_SHAPE'],
+    ['no state among the states', withHead('states: {}'), '2:9 MODEL_WRONG_SHAPE'],
     ['a state that is nothing', withHead('states:\n  flight:'), '3:3 MODEL_WRONG_SHAPE'],
     [
       'a limit that is unknown',

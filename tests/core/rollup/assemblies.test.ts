@@ -75,6 +75,43 @@ describe('growth', () => {
     ).toEqual(['MODEL_UNKNOWN_MATURITY 3:57']);
   });
 
+  it('refuses an allowance below zero, also one that a parameter makes', () => {
+    const given = (allowance: string) => `
+      assembly: g
+      parameters: { gx: -150 % }
+      growth: { estimated: ${allowance} }
+      parts: [ { name: p, solid: particle, mass: 1, maturity: estimated } ]
+    `;
+    for (const allowance of ['gx', '-150 %', 'gx / 2 - 75 %']) {
+      const [fault] = faultsOf(given(allowance));
+      expect(placesOf([fault!])).toEqual(['GROWTH_NEGATIVE 3:22']);
+      expect(fault!.message).toBe('expected a growth allowance of zero or more, found -150 %');
+    }
+    expect(recordOfText(given('-gx')).predicted.mass).toBeCloseTo(2.5, 14);
+  });
+
+  it('refuses a prediction in which a cut-out has outgrown its host', () => {
+    // A 40 mm hole through a 100 mm cube of 1 g/mm³: 1000 − 160 g; the cut grows by its own maturity.
+    const cube = (allowance: string, hole = '40, 40, 100', x = '0') => `
+      assembly: c
+      units: { length: mm, mass: g }
+      growth: { firm: 0 %, loose: ${allowance} }
+      parts:
+        - name: cube
+          solid: { box: { size: [ 100, 100, 100 ] } }
+          density: 1e-3
+          maturity: firm
+          parts: [ { name: hole, solid: { box: { size: [ ${hole} ] } }, cut: true, at: [ ${x}, 0, 0 ], maturity: loose } ]
+    `;
+    expect(recordOfText(cube('100 %')).predicted.mass).toBeCloseTo(0.68, 14);
+    // At seven times its mass the hole weighs more than the cube.
+    const [gone] = faultsOf(cube('600 %'));
+    expect(gone).toMatchObject({ code: 'ASSEMBLY_NO_MASS', message: expect.stringContaining('growth') });
+    // A slice of 100 g at one face, five times its mass: ∫x² is 0.83 g·m² of the cube less 1.02 g·m².
+    const [more] = faultsOf(cube('400 %', '10, 100, 100', '45'));
+    expect(more).toMatchObject({ code: 'ASSEMBLY_IMPOSSIBLE', message: expect.stringContaining('growth') });
+  });
+
   it('sums a margin study’s units as they are published (ESA SRE-PA/2011.097: 5, 10 and 20 % by category)', () => {
     const record = recordOfText(`
       assembly: study

@@ -363,6 +363,65 @@ describe('where mass comes from', () => {
   });
 });
 
+describe('figures that no double carries', () => {
+  const at = (...parts: string[]) =>
+    placesOf(faultsOf(`assembly: m\nparts:\n${parts.map((p, i) => `  - { name: p${i}, ${p} }`).join('\n')}`));
+  const small = 'solid: particle, mass: 1';
+
+  it.each([
+    ['a mass', 'solid: particle, mass: 1e300'],
+    ['a place', 'solid: particle, mass: 1, at: [ 1e300, 0, 0 ]'],
+    ['a place whose square is too large', 'solid: particle, mass: 1, at: [ 1e200, 0, 0 ]'],
+    ['a step of copies', `${small}, repeat: { line: { count: 3, step: [ -1e300, 0, 0 ] } }`],
+    ['a size', 'solid: { box: { size: [ 1e300, 1, 1 ] } }, mass: 1'],
+    [
+      'corners',
+      'solid: { extrusion: { outline: [ [ 0, 0 ], [ 1e200, 0 ], [ 0, 1 ] ], height: 1 } }, mass: 1',
+    ],
+    ['a volume', 'solid: { sphere: { diameter: 1e30 } }, density: 1000'],
+    ['an override', `${small}, override: { mass: 1e300, reason: r }`],
+    [
+      'a bought item',
+      'body: { mass: 1, inertia: { xx: 1e300, yy: 1e300, zz: 1e300, xy: 0, xz: 0, yz: 0, about: centre } }',
+    ],
+  ])('%s is refused at its part', (_, part) => {
+    expect(at(small, part)).toEqual([expect.stringMatching(/^PART_TOO_LARGE 4:/)]);
+  });
+
+  it('a frame is refused at the frame, also for what is wrong with its turn', () => {
+    const frame = (f: string) =>
+      placesOf(faultsOf(`assembly: m\nframes: { f: ${f} }\nparts: [ { name: p, ${small} } ]`));
+    expect(frame('{ at: [ 0, 1e300, 0 ] }')).toEqual(['PART_TOO_LARGE 2:14']);
+    expect(frame('{ rotate: [ { axis: [ 0, 0, 0 ], angle: 1 } ] }')).toEqual(['ROTATION_NO_AXIS 2:34']);
+  });
+
+  it('the largest masses and lengths that are taken give finite numbers throughout', () => {
+    const record = recordOfText(`
+      assembly: m
+      frames: { f: { at: [ 1e40, -1e40, 1e40 ], rotate: [ { x: 30 deg } ] } }
+      parts:
+        - { name: a, solid: particle, mass: 1e40, at: [ 1e40, 0, 0 ], repeat: { mirror: yz } }
+        - { name: b, solid: particle, mass: 1e40, at: [ 0, 1e40, -1e40 ] }
+    `);
+    expect(JSON.stringify(record.basic) + JSON.stringify(record.frames)).not.toContain('null,null');
+    // 2 · m d² about z from a; b adds (2/3) m d² to xx about the centre.
+    expectClose([record.basic.inertia!.aboutOrigin[2]![2]!], [3e120], 1e-14);
+    expect(record.basic.principal!.moments.every(Number.isFinite)).toBe(true);
+    expect(record.parts.every((p) => Object.values(p.share).every(Number.isFinite))).toBe(true);
+  });
+
+  it('an axis may be as short or long as it likes', () => {
+    const turned = (axis: string) =>
+      centre(
+        `assembly: m\nparts: [ { name: p, parts: [ { name: q, ${small}, at: [ 1, 2, 3 ] } ], rotate: [ { axis: ${axis}, angle: 90 deg } ] } ]`,
+      );
+    for (const size of ['1', '1e-200', '1e200', '4e-324', '1e308'])
+      expectClose(turned(`[ 0, 0, ${size} ]`), [-2, 1, 3], 1e-15);
+    // A third of a turn about the diagonal would be exact; a quarter about [1, 1, 0] takes z to [1, −1, 0]/√2 · z.
+    expectClose(turned('[ 1e-200, 1e-200, 0 ]'), turned('[ 1, 1, 0 ]'), 1e-15);
+  });
+});
+
 describe('bought items', () => {
   const body = (inertia: string, head = '') => `
     assembly: b

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { XMLParser, XMLValidator } from 'fast-xml-parser';
 import { describe, expect, it } from 'vitest';
-import { CSV_COLUMNS, formatCsv } from '../../../../cli/output/formats/csv.ts';
+import { CSV_COLUMNS, formatCsv } from '#core/record/record-csv.ts';
 import { formatJson, formatNdjson } from '../../../../cli/output/formats/json.ts';
 import { formatJunit } from '../../../../cli/output/formats/junit.ts';
 import { formatMarkdown } from '../../../../cli/output/formats/markdown.ts';
