@@ -2,4 +2,4 @@
  * Version of the arithmetic and of what a record means. It is part of every stamp: raise it whenever the same inputs
  * may come to other bits.
  */
-export const CORE_VERSION = '1';
+export const CORE_VERSION = '2';

@@ -29,8 +29,12 @@ interface ShapeTypes {
 
 type ShapeOf<K extends SolidKey> = ShapeTypes[(typeof SOLID_KEY_SHAPES)[K][0]];
 type Written<K extends SolidKey> = K extends 'box_size' | 'flat_size' ? 'size' : K;
-type KeysOf<S> = S extends { needs: readonly (readonly (infer K)[])[]; may?: readonly (infer M)[] }
-  ? K | M
+type KeysOf<S> = S extends {
+  needs: readonly (readonly (infer K)[])[];
+  must?: readonly (infer N)[];
+  may?: readonly (infer M)[];
+}
+  ? K | N | M
   : never;
 
 /** The keys of one solid as they stand in a file, all text. Which of them are needed is in SOLIDS. */
@@ -59,12 +63,19 @@ const SHAPES: Record<KeyShape, z.ZodType> = {
 const KEY_SCHEMAS = Object.fromEntries(
   Object.entries(SOLID_KEY_SHAPES).map(([key, [shape, description]]) => [
     key,
-    SHAPES[shape].optional().describe(description),
+    SHAPES[shape].describe(description),
   ]),
 ) as unknown as Record<SolidKey, z.ZodType>;
 
-function solidSchema(name: SolidName, { about, needs, may = [] }: SolidKeys): z.ZodType {
-  const keys = [...needs.flat(), ...may].map((key) => [writtenKey(key), KEY_SCHEMAS[key]]);
+const OPTIONAL_KEYS = Object.fromEntries(
+  Object.entries(KEY_SCHEMAS).map(([key, schema]) => [key, schema.optional()]),
+) as unknown as Record<SolidKey, z.ZodType>;
+
+function solidSchema(name: SolidName, { about, needs, must = [], may = [] }: SolidKeys): z.ZodType {
+  const keys = [
+    ...must.map((key) => [writtenKey(key), KEY_SCHEMAS[key]]),
+    ...[...needs.flat(), ...may].map((key) => [writtenKey(key), OPTIONAL_KEYS[key]]),
+  ];
   const shape = Object.fromEntries(keys) as Record<string, z.ZodType>;
   const corners = VERTEX_COUNT[name];
   if (corners !== undefined)

@@ -86,7 +86,11 @@ export const assembly = z.strictObject({
   materials: z.record(text, material).optional().describe('named densities'),
   frames: z.record(text, otherFrame).optional().describe("others' points and axes, for output and limits"),
   growth: growth.optional().describe('growth allowance by maturity, or by category and maturity'),
-  states: z.record(text, state).optional().describe('named states; one, nominal, where left out'),
+  states: z
+    .record(text, state)
+    .meta({ minProperties: 1 })
+    .optional()
+    .describe('named states; one, nominal, where left out'),
   parts: z.array(part).min(1).describe('the parts'),
   limits: z.array(limit).optional().describe('bounds to judge'),
   sweeps: z.record(text, sweep).optional().describe('named grids of parameter values'),

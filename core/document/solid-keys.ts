@@ -48,6 +48,8 @@ export interface SolidKeys {
   about: string;
   /** One key of each group is needed, and only one; judged where solids are made. */
   needs: readonly (readonly SolidKey[])[];
+  /** Keys that the schema itself demands, of a solid that is read from a file and not made. */
+  must?: readonly SolidKey[];
   /** Keys that may be left out. */
   may?: readonly SolidKey[];
 }
@@ -92,7 +94,8 @@ export const SOLIDS = {
   polyhedron: { about: 'corners and planar faces in its own axes', needs: [['vertices'], ['faces']] },
   mesh: {
     about: 'a closed mesh in its own axes',
-    needs: [['file'], ['unit']],
+    needs: [],
+    must: ['file', 'unit'],
     may: ['fill', 'thickness', 'weld'],
   },
   ring: { about: 'thin circle about z; origin at the centre', needs: [DIAMETER] },

@@ -14,13 +14,6 @@ export function readGrowth(growth: GrowthDocument | undefined, reader: FileReade
   const tables = new Map<string | null, Map<string, Quantity>>();
   const put = (category: string | null, maturity: string, text: string, where: Where) => {
     const quantity = reader.quantity(text, PLAIN_UNIT, where);
-    const { constant } = quantity.expression;
-    if (constant !== undefined && !(constant >= 0))
-      reader.fault(where, {
-        code: 'GROWTH_NEGATIVE',
-        message: `expected a growth allowance of zero or more, found ${text}`,
-        hint: 'write it as a percentage of the basic mass, for instance 15 %',
-      });
     const table = tables.get(category) ?? new Map<string, Quantity>();
     tables.set(category, table.set(maturity, quantity));
   };

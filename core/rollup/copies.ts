@@ -1,7 +1,7 @@
 import { compose, IN_PLACE, type Placement } from '../inertia/placement.ts';
 import { apply } from '../linalg/matrix3.ts';
 import type { Matrix3 } from '../linalg/symmetric3.ts';
-import { scale, subtract, type Vector3 } from '../linalg/vector3.ts';
+import { scale, subtract, unit, type Vector3 } from '../linalg/vector3.ts';
 import { rotationSineCosine } from '../math/index.ts';
 
 export type Plane = 'xy' | 'xz' | 'yz';
@@ -66,8 +66,7 @@ export function turnAbout(axis: 'x' | 'y' | 'z', angle: number): Matrix3 {
  * @param angle [rad]
  */
 export function turnAboutVector(axis: Vector3, angle: number): Matrix3 {
-  const n = Math.sqrt(axis[0] * axis[0] + axis[1] * axis[1] + axis[2] * axis[2]);
-  const [x, y, z] = [axis[0] / n, axis[1] / n, axis[2] / n];
+  const [x, y, z] = unit(axis);
   const { sine: s, cosine: c } = rotationSineCosine(angle);
   const k = 1 - c;
   return [

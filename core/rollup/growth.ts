@@ -1,4 +1,4 @@
-import type { GrowthModel, PartModel } from '../model/model.ts';
+import type { GrowthModel, PartModel, Quantity } from '../model/model.ts';
 import { within } from '../model/where.ts';
 import { nearestName } from '../nearest-name.ts';
 import { evaluate, faultAt, type GrowthTables, type Scope } from './scope.ts';
@@ -7,9 +7,20 @@ export const growthTablesOf = (growth: GrowthModel, scope: Scope): GrowthTables 
   new Map(
     [...growth.tables].map(([category, table]) => [
       category,
-      new Map([...table].map(([maturity, q]) => [maturity, evaluate(q, scope)])),
+      new Map([...table].map(([maturity, q]) => [maturity, allowanceOf(q, scope)])),
     ]),
   );
+
+function allowanceOf(quantity: Quantity, scope: Scope): number {
+  const allowance = evaluate(quantity, scope);
+  if (allowance >= 0) return allowance;
+  faultAt(scope, quantity.where, {
+    code: 'GROWTH_NEGATIVE',
+    message: `expected a growth allowance of zero or more, found ${Number((100 * allowance).toPrecision(12))} %`,
+    hint: 'write it as a percentage of the basic mass, for instance 15 %',
+  });
+  return 0;
+}
 
 /**
  * Growth allowance of a part by its maturity and category (predicted = basic × (1 + allowance); ANSI/AIAA S-120A,

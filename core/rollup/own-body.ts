@@ -8,6 +8,7 @@ import type { DimensionValue, Extent, SolidDimensions } from '../solids/dimensio
 import { resolveTwins } from '../solids/twins.ts';
 import { formatQuantity, LENGTH, unitFor } from '../units/index.ts';
 import { readMeshPart } from './read-mesh-part.ts';
+import { refuseTooLong } from './refuse-too-large.ts';
 import { evaluate, faultAt, type Scope } from './scope.ts';
 import { vendorBody } from './vendor-body.ts';
 
@@ -54,6 +55,7 @@ function solidBody(
   const given: Record<string, DimensionValue | undefined> = {};
   for (const [key, model] of shape.dimensions) given[key] = dimensionValue(model, scope);
   const dimensions = resolveTwins(solid, given);
+  refuseTooLong(numbersIn(Object.values(dimensions)), part.name, shape.where, scope);
   const length = unitFor(LENGTH, scope.file.units);
   const fault = solid.check(dimensions, (metres) => formatQuantity(metres, length));
   if (fault) {
@@ -182,6 +184,9 @@ function checkThickness(
       at: { file: scope.file.path, line: part.line },
     });
 }
+
+const numbersIn = (values: readonly unknown[]): number[] =>
+  values.flat(Number.POSITIVE_INFINITY).filter((x): x is number => typeof x === 'number');
 
 function dimensionValue(model: DimensionModel, scope: Scope): DimensionValue {
   if (Array.isArray(model)) return model.map((m) => dimensionValue(m, scope)) as unknown as DimensionValue;

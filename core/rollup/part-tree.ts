@@ -1,5 +1,5 @@
 import { type Moments, netBody, netMass } from '../inertia/balance-sum.ts';
-import { scaleBody } from '../inertia/body.ts';
+import { type Body, scaleBody } from '../inertia/body.ts';
 import { compose } from '../inertia/placement.ts';
 import { judgeBody } from '../inertia/possibility.ts';
 import type { FileModel, PartModel } from '../model/model.ts';
@@ -13,6 +13,7 @@ import { growthOf, growthTablesOf } from './growth.ts';
 import { ownBody } from './own-body.ts';
 import { fillParameters } from './parameter-values.ts';
 import { ORIGIN, placementOf, repeatsOf } from './placing.ts';
+import { refuseTooLarge, refuseTooLargeMoments } from './refuse-too-large.ts';
 import { evaluate, faultAt, type Scope } from './scope.ts';
 import type { Both, Member, PartNode } from './tree.ts';
 import { impossible } from './vendor-body.ts';
@@ -51,20 +52,17 @@ function memberOf(part: PartModel, prefix: string, inherited: Inherited, scope: 
   if (!node) return null;
   const anchor = part.placing.anchor === 'centroid' ? (node.own?.body.centre ?? ORIGIN) : ORIGIN;
   const placement = placementOf(part.placing, anchor, scope);
-  if (part.placing.repeat.length === 0)
-    return { kind: 'one', name: part.name, node, placement, moments: placeMoments(placement, node.moments) };
   const placed = placeMoments(placement, node.moments);
+  refuseTooLargeMoments(placed, path, part.where, scope);
+  if (part.placing.repeat.length === 0)
+    return { kind: 'one', name: part.name, node, placement, moments: placed };
   const standings = copiesOf(repeatsOf(part.placing.repeat, scope));
   const copies = standings.flatMap((copy, i) => {
     const name = `${part.name}[${i + 1}]`;
     if (scope.omit.has(prefix + name)) return [];
-    return {
-      kind: 'one' as const,
-      name,
-      node,
-      placement: compose(copy, placement),
-      moments: placeMoments(copy, placed),
-    };
+    const moments = placeMoments(copy, placed);
+    refuseTooLargeMoments(moments, prefix + name, part.where, scope);
+    return { kind: 'one' as const, name, node, placement: compose(copy, placement), moments };
   });
   return {
     kind: 'copies',
@@ -83,6 +81,7 @@ function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scop
   const own = ownBody(part, part.cut ? inherited.hostDensity : null, scope);
   const ownExpected = part.shape.kind !== 'group' && part.shape.kind !== 'include';
   if (ownExpected && !own) return null;
+  if (own) refuseTooLarge(own.body, path, part.where, scope);
   const attributes = { maturity, category, basis };
   const growth = own || part.override ? growthOf(part, path, attributes, own !== null, scope) : 0;
   const hostDensity =
@@ -104,6 +103,8 @@ function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scop
           basic: scaleMoments(sum.basic, factor.basic),
           predicted: scaleMoments(sum.predicted, factor.predicted),
         };
+  refuseTooLargeMoments(scaled, path, part.where, scope);
+  const ownSlack = own?.slack ?? 0;
   const node: PartNode = {
     part,
     scope,
@@ -113,15 +114,18 @@ function nodeOf(part: PartModel, path: string, inherited: Inherited, scope: Scop
     members,
     factor,
     leaves: leavesIn(part, path, own !== null, members, scope),
-    slack: factor.basic * ((own?.slack ?? 0) + slackOf(members)),
+    slack: {
+      basic: factor.basic * (ownSlack + slackOf(members, 'basic')),
+      predicted: factor.predicted * (ownSlack * (1 + growth) + slackOf(members, 'predicted')),
+    },
     moments: part.cut ? onBoth(scaled, turnToCut) : scaled,
     overridden: override?.overridden ?? null,
   };
-  if (members.length > 0) judgeGroup(node, path, scaled.basic, scope);
+  if (members.length > 0) judgeGroup(node, path, scaled, scope);
   return node;
 }
 
-function ownMoments(body: Parameters<typeof scaleBody>[0], growth: number): Both<Moments> {
+function ownMoments(body: Body, growth: number): Both<Moments> {
   const basic = { material: body, cut: null };
   return { basic, predicted: growth === 0 ? basic : { material: scaleBody(body, 1 + growth), cut: null } };
 }
@@ -166,8 +170,8 @@ function refuseTooMany(where: Where, path: string, leaves: number, scope: Scope)
 }
 
 /** What rounding is granted to the bought items of some members together [kg·m²]. */
-export const slackOf = (members: readonly Member[]): number =>
-  members.reduce((sum, m) => sum + m.node.slack * (m.kind === 'one' ? 1 : m.copies.length), 0);
+export const slackOf = (members: readonly Member[], on: keyof Both<number>): number =>
+  members.reduce((sum, m) => sum + m.node.slack[on] * (m.kind === 'one' ? 1 : m.copies.length), 0);
 
 /** An override scales the net of children and cuts to the new mass, the centre kept. */
 function overrideOf(part: PartModel, path: string, sum: Both<Moments>, growth: number, scope: Scope) {
@@ -175,20 +179,20 @@ function overrideOf(part: PartModel, path: string, sum: Both<Moments>, growth: n
   const { basic } = sum;
   const from = netMass(basic);
   const to = evaluate(part.override.mass, scope);
-  if (!(from > 0) || !(to > 0)) {
+  const before = netMass(sum.predicted);
+  if (!(from > 0) || !(before > 0) || !(to > 0)) {
     const say = (m: number) => formatQuantity(Number(m.toPrecision(12)), unitFor(MASS, scope.file.units));
     faultAt(scope, part.override.where, {
       code: 'OVERRIDE_NOT_POSITIVE',
       message:
         to > 0
-          ? `expected '${path}' to have a mass above zero that an override can scale, found ${say(from)}`
+          ? `expected '${path}' to have a mass above zero that an override can scale, found ${say(from)}${from > 0 ? `, and ${say(before)} with growth allowance` : ''}`
           : `expected an override to a mass above zero, found ${say(to)}`,
       hint:
         to > 0 ? 'give the parts masses first' : 'to leave the part out of a state, use `omit` or `states`',
     });
     return null;
   }
-  const before = netMass(sum.predicted);
   const predicted = part.maturity !== null ? to * (1 + growth) : to * (before / from);
   return {
     factor: { basic: to / from, predicted: predicted / before },
@@ -196,17 +200,36 @@ function overrideOf(part: PartModel, path: string, sum: Both<Moments>, growth: n
   };
 }
 
-function judgeGroup(node: PartNode, path: string, moments: Moments, scope: Scope): void {
-  const body = netBody(moments);
-  if (!body) return;
-  const possibility = judgeBody(body, node.slack);
-  if (possibility.possible) return;
-  faultAt(scope, node.part.where, {
-    code: 'ASSEMBLY_IMPOSSIBLE',
-    message: impossible(path, possibility, scope),
-    hint: 'a cut-out takes away more than is there: see that each lies wholly in the material of its host',
-  });
+function judgeGroup(node: PartNode, path: string, moments: Both<Moments>, scope: Scope): void {
+  judgeNet(onBoth(moments, netBody), node.slack, path, node.part.where, scope);
 }
+
+/** Whether a body can have what is left of a group, as basic masses and with growth allowance; the first that fails. */
+export function judgeNet(
+  bodies: Both<Body | null>,
+  slack: Both<number>,
+  path: string,
+  where: Where | null,
+  scope: Scope,
+): void {
+  for (const on of bodies.predicted === bodies.basic ? BASIC : BASIC_AND_PREDICTED) {
+    const body = bodies[on];
+    const possibility = body && judgeBody(body, slack[on]);
+    if (!possibility || possibility.possible) continue;
+    faultAt(scope, where, {
+      code: 'ASSEMBLY_IMPOSSIBLE',
+      message: impossible(on === 'basic' ? path : `${path} with growth allowance`, possibility, scope),
+      hint:
+        on === 'basic'
+          ? 'a cut-out takes away more than is there: see that each lies wholly in the material of its host'
+          : 'a cut-out grows by more than its host does: give both one maturity and category',
+    });
+    return;
+  }
+}
+
+const BASIC = ['basic'] as const;
+const BASIC_AND_PREDICTED = ['basic', 'predicted'] as const;
 
 /** The parts of an included file, evaluated in a scope of its own. */
 function includedMembers(

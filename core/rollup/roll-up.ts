@@ -1,16 +1,23 @@
 import { FaultList, InputError, type Warning } from '../errors.ts';
 import { type Moments, netMass } from '../inertia/balance-sum.ts';
 import type { Body } from '../inertia/body.ts';
-import { judgeBody } from '../inertia/possibility.ts';
 import type { Project } from '../model/read-project.ts';
 import { nearestName } from '../nearest-name.ts';
 import { sumAndClose } from './both-moments.ts';
 import { checkCopies, judgedIn, omittedIn } from './check-copies.ts';
 import { warnIfCutLeavesHost } from './cut-extent.ts';
-import { membersOf, NOTHING_INHERITED, openScope, refuseTooManyAtTop, slackOf } from './part-tree.ts';
+import {
+  judgeNet,
+  membersOf,
+  NOTHING_INHERITED,
+  openScope,
+  refuseTooManyAtTop,
+  slackOf,
+} from './part-tree.ts';
+import { frameOf } from './placing.ts';
+import { refuseTooLong } from './refuse-too-large.ts';
 import { faultAt, type Run, type Scope } from './scope.ts';
 import { type Both, type Leaf, leavesOf, type Member, netBodies } from './tree.ts';
-import { impossible } from './vendor-body.ts';
 import { gyrationWarnings } from './warn-gyration.ts';
 
 /** One assembly in one state, rolled up. */
@@ -55,6 +62,8 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
   const scope = openScope(root, options.state, options.set ?? new Map(), run, '', null);
   run.faults.check();
   const members = membersOf(root.parts, '', NOTHING_INHERITED, scope);
+  for (const frame of root.frames)
+    refuseTooLong(frameOf(frame, scope).offset, frame.name, frame.where, scope);
   checkCopies([...omittedIn(scope), ...judgedIn(scope)], members, scope);
   run.faults.check();
   refuseTooManyAtTop(members, scope);
@@ -62,21 +71,18 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
   const moments = members.length > 0 ? sumAndClose(members.map((m) => m.moments)) : EMPTY;
   const total = netBodies(moments);
   if (!total.basic || !total.predicted) {
+    const [found, which] = total.basic
+      ? [netMass(moments.predicted), ' with growth allowance']
+      : [netMass(moments.basic), ''];
     faultAt(scope, null, {
       code: 'ASSEMBLY_NO_MASS',
-      message: `expected a total mass above zero in state '${options.state}', found ${netMass(moments.basic)} kg`,
+      message: `expected a total mass above zero in state '${options.state}', found ${found} kg${which}`,
       hint: 'the cut-outs may weigh as much as the material, or every part be left out of this state',
     });
     run.faults.check();
   }
-  const body = total as Both<Body>;
-  const possibility = judgeBody(body.basic, slackOf(members));
-  if (!possibility.possible)
-    faultAt(scope, null, {
-      code: 'ASSEMBLY_IMPOSSIBLE',
-      message: impossible('the whole', possibility, scope),
-      hint: 'a cut-out takes away more than is there: see that each lies wholly in the material of its host',
-    });
+  const slack = { basic: slackOf(members, 'basic'), predicted: slackOf(members, 'predicted') };
+  judgeNet(total, slack, 'the whole', null, scope);
   run.faults.check();
   warnWithoutMaturity(run);
   const leaves = [...leavesOf(members)];
@@ -88,7 +94,7 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
     members,
     leaves,
     moments,
-    total: body,
+    total: total as Both<Body>,
     warnings: run.warnings,
     meshInputs: run.meshInputs,
   };

@@ -33,7 +33,7 @@ export interface PartNode {
   /** Solids and bodies in it, every copy counted. */
   readonly leaves: number;
   /** Sum of what rounding is granted to bought items inside, for judging what is computed from them [kg·m²]. */
-  readonly slack: number;
+  readonly slack: Both<number>;
   /** What the override replaced [kg], basic. */
   readonly overridden: { readonly from: number; readonly to: number } | null;
 }

@@ -8,6 +8,7 @@ import type { BodyModel, PartModel } from '../model/model.ts';
 import { formatQuantity, INERTIA, unitFor } from '../units/index.ts';
 import { massOf } from './own-body.ts';
 import { ORIGIN } from './placing.ts';
+import { refuseTooLarge } from './refuse-too-large.ts';
 import { evaluate, evaluateVector, faultAt, type Scope } from './scope.ts';
 
 /**
@@ -25,8 +26,9 @@ export function vendorBody(model: BodyModel, part: PartModel, scope: Scope): { b
   const about =
     declared === 'centre' ? centre : declared === 'origin' ? ORIGIN : evaluateVector(declared, scope);
   const central = about === centre ? inertia : moveToCentre(inertia, mass, subtract(centre, about));
-  const slack = judge(model, part, { mass, centre, inertia, about, central }, scope);
-  return { body: { mass, centre, secondMoments: secondMomentsFromInertia(central) }, slack };
+  const body = { mass, centre, secondMoments: secondMomentsFromInertia(central) };
+  refuseTooLarge(body, part.name, part.where, scope);
+  return { body, slack: judge(model, part, { mass, centre, inertia, about, central }, scope) };
 }
 
 /** The six as the tensor's own elements (products negative). */
