@@ -78,7 +78,10 @@ const signedIn = new Map<Asker, Client>();
 
 /** One sign-in serves every route but those that end it. */
 async function clientOf(asker: Asker, name: RouteName): Promise<Client> {
-  if (name.startsWith('signOut')) return clients[asker]();
+  if (name.startsWith('signOut')) {
+    signedIn.clear();
+    return clients[asker]();
+  }
   const known = signedIn.get(asker) ?? (await clients[asker]());
   signedIn.set(asker, known);
   return known;
