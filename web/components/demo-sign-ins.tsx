@@ -1,16 +1,38 @@
 import type { Session } from '#core/api/people.ts';
 import { Button } from './button.tsx';
-import { DataTable } from './data-table.tsx';
+import { type Column, DataTable } from './data-table.tsx';
 import { SectionHead } from './section-head.tsx';
 
-/** The people of the demo, each with a button that fills the form. */
+type SignIn = Session['demoSignIns'][number];
+
+/** The people of the demo, each with a button that fills the form. A password that all share is said once. */
 export function DemoSignIns({
   signIns,
   fill,
 }: {
-  signIns: Session['demoSignIns'];
+  signIns: readonly SignIn[];
   fill: (email: string, password: string) => void;
 }) {
+  const shared = signIns.every(({ password }) => password === signIns[0]!.password);
+  const columns: Column<SignIn>[] = [
+    { key: 'email', head: 'e-mail', cell: ({ email }) => email },
+    { key: 'role', head: 'role', cell: ({ role }) => role },
+  ];
+  if (!shared)
+    columns.push({
+      key: 'password',
+      head: 'password',
+      cell: ({ password }) => <span className="code">{password}</span>,
+    });
+  columns.push({
+    key: 'fill',
+    head: '',
+    cell: ({ email, password, role }) => (
+      <Button kind="word" aria-label={`Fill in ${email}, ${role}`} onClick={() => fill(email, password)}>
+        Fill in
+      </Button>
+    ),
+  });
   return (
     <section aria-labelledby="demo">
       <SectionHead title="This is a demo" id="demo">
@@ -19,26 +41,14 @@ export function DemoSignIns({
       <DataTable
         caption="Sign-ins of the demo"
         rows={signIns}
-        keyOf={(row) => row.email}
-        columns={[
-          { key: 'email', head: 'e-mail', cell: (row) => row.email },
-          { key: 'role', head: 'role', cell: (row) => row.role },
-          { key: 'password', head: 'password', cell: (row) => <span className="code">{row.password}</span> },
-          {
-            key: 'fill',
-            head: '',
-            cell: (row) => (
-              <Button
-                kind="word"
-                aria-label={`Fill in ${row.email}, ${row.role}`}
-                onClick={() => fill(row.email, row.password)}
-              >
-                Fill in
-              </Button>
-            ),
-          },
-        ]}
+        keyOf={({ email }) => email}
+        columns={columns}
       />
+      {shared && (
+        <p className="conv mt-2">
+          The password of each is <b className="code">{signIns[0]!.password}</b>
+        </p>
+      )}
     </section>
   );
 }

@@ -13,7 +13,11 @@ export function ScrollRegion({
 }) {
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls must take the focus to scroll by keyboard.
-    <section aria-label={label} tabIndex={0} className={`scroll ${keepFirst ? 'keep-first' : ''}`}>
+    <section
+      aria-label={`${label}: table`}
+      tabIndex={0}
+      className={`scroll ${keepFirst ? 'keep-first' : ''}`}
+    >
       {children}
     </section>
   );

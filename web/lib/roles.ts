@@ -11,6 +11,6 @@ export function atLeast(role: Role, needed: Role): boolean {
 /** What a membership can be, with what it may do in a few words. */
 export const MEMBER_ROLES = [
   { role: 'viewer', may: 'reads runs, differences and reports' },
-  { role: 'engineer', may: 'also pushes, uploads, comments and makes tokens' },
+  { role: 'engineer', may: 'also pushes, uploads, comments, makes tokens' },
   { role: 'approver', may: 'also releases runs that others pushed' },
 ] as const;

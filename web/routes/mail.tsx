@@ -27,21 +27,31 @@ export function Component() {
           </>
         }
       >
-        {(list) => list.map((message) => <Message key={message.id} message={message} />)}
+        {(list) => (
+          <div className="mails">
+            {list.map((message, i) => (
+              <Message key={message.id} message={message} open={i === 0} />
+            ))}
+          </div>
+        )}
       </View>
     </>
   );
 }
 
-function Message({ message: { to, at, subject, text } }: { message: Mail }) {
+/** One message, shut but for the newest; its head opens it. */
+function Message({ message: { to, at, subject, text }, open }: { message: Mail; open: boolean }) {
   return (
-    <article>
-      <SectionHead title={subject}>
-        to {to} · <Time at={at} />
-      </SectionHead>
+    <details open={open}>
+      <summary>
+        <b>{subject}</b>
+        <span className="soft">
+          to {to} · <Time at={at} />
+        </span>
+      </summary>
       <p className="max-w-[80ch] whitespace-pre-wrap">
         <Linked text={text} />
       </p>
-    </article>
+    </details>
   );
 }

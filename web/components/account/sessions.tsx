@@ -4,6 +4,7 @@ import { Confirm } from '#web/components/confirm.tsx';
 import { DataTable } from '#web/components/data-table.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { Time } from '#web/components/time.tsx';
+import { agentName } from '#web/lib/agent-name.ts';
 
 /** Where one is signed in, and the way to end it all. */
 export function Sessions({ sessions }: { sessions: Account['sessions'] }) {
@@ -22,7 +23,7 @@ export function Sessions({ sessions }: { sessions: Account['sessions'] }) {
             head: 'with',
             cell: ({ agent, here }) => (
               <>
-                {agent === '' ? 'unknown' : agent}
+                <span title={agent}>{agentName(agent)}</span>
                 {here && <b> · this one</b>}
               </>
             ),

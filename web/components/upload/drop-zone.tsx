@@ -1,7 +1,8 @@
 import { type ChangeEvent, type DragEvent, useId, useRef, useState } from 'react';
 import { Button } from '#web/components/button.tsx';
 import { useFieldFault } from '#web/components/form.tsx';
-import { type ChosenFile, filesOfChooser, filesOfDrop } from '#web/lib/chosen-files.ts';
+import type { ChosenFile } from '#web/lib/chosen-files.ts';
+import { filesOfChooser, filesOfDrop } from '#web/lib/files-of-drop.ts';
 
 /** Where files are dropped, with choosers for files and for a whole folder beside it. */
 export function DropZone({ add }: { add: (files: readonly ChosenFile[]) => Promise<unknown> }) {
