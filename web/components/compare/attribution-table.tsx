@@ -1,6 +1,6 @@
 import type { Difference } from '#core/difference/index.ts';
 import type { DisplayUnits } from '#core/figures/index.ts';
-import { ScrollRegion } from '#web/components/scroll-region.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 import { CAUSE_WORDS } from './attribution-bars.tsx';
 import { type Attribution, CAUSES } from './attribution-rows.ts';
 import { happenedTo } from './part-words.ts';
@@ -20,7 +20,7 @@ export function AttributionTable({
   const columns = [...CAUSES, 'total'] as const;
   return (
     <div className="mt-5">
-      <ScrollRegion label={`${label} as a table`}>
+      <WideTable label={`${label} as a table`}>
         <table>
           <caption className="sr-only">
             {label}, in {attribution.unit}
@@ -64,7 +64,7 @@ export function AttributionTable({
             </tr>
           </tbody>
         </table>
-      </ScrollRegion>
+      </WideTable>
       {attribution.notes.map((note) => (
         <p key={note} className="soft mt-2 text-sm">
           {note}

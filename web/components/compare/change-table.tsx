@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { ScrollRegion } from '#web/components/scroll-region.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 import type { ChangeRow } from './change-rows.ts';
 
 /** A, B, their change, and the change as a share of A. */
@@ -14,7 +14,7 @@ export function ChangeTable({
   remark?: string;
 }) {
   return (
-    <ScrollRegion label={label}>
+    <WideTable label={label}>
       <table>
         <caption className="sr-only">{label}: A, B and the change from A to B</caption>
         <thead>
@@ -55,6 +55,6 @@ export function ChangeTable({
           })}
         </tbody>
       </table>
-    </ScrollRegion>
+    </WideTable>
   );
 }

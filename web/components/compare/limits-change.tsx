@@ -1,8 +1,8 @@
 import type { Difference, LimitChange, LimitSide } from '#core/difference/index.ts';
 import { type DisplayUnits, printLimit, unitOfLimit } from '#core/figures/index.ts';
-import { ScrollRegion } from '#web/components/scroll-region.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { VerdictMark } from '#web/components/verdict-mark.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 
 const ORDER: LimitChange['verdict'][] = ['now outside', 'now within', 'added', 'removed', 'same'];
 
@@ -21,7 +21,7 @@ export function LimitsChangeSection({ difference, units }: { difference: Differe
         {still > 0 && ` · ${still} did not move`}
       </SectionHead>
       {limits.length > 0 && (
-        <ScrollRegion label="Limits">
+        <WideTable label="Limits">
           <table>
             <caption className="sr-only">Limits: value and verdict in A and in B</caption>
             <thead>
@@ -45,7 +45,7 @@ export function LimitsChangeSection({ difference, units }: { difference: Differe
               ))}
             </tbody>
           </table>
-        </ScrollRegion>
+        </WideTable>
       )}
     </section>
   );

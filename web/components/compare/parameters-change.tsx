@@ -1,7 +1,7 @@
 import type { Difference, ValueChange } from '#core/difference/index.ts';
 import { formatShort, unitText } from '#core/figures/index.ts';
-import { ScrollRegion } from '#web/components/scroll-region.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 import { signed } from './change-rows.ts';
 
 /** Parameters whose value differs. */
@@ -12,7 +12,7 @@ export function ParametersChangeSection({ parameters }: Pick<Difference, 'parame
         {parameters.length === 0 ? 'none changed' : `${parameters.length} changed · SI`}
       </SectionHead>
       {parameters.length > 0 && (
-        <ScrollRegion label="Parameters">
+        <WideTable label="Parameters">
           <table className="max-w-3xl">
             <caption className="sr-only">Parameters in A and in B, SI</caption>
             <thead>
@@ -40,7 +40,7 @@ export function ParametersChangeSection({ parameters }: Pick<Difference, 'parame
               ))}
             </tbody>
           </table>
-        </ScrollRegion>
+        </WideTable>
       )}
     </section>
   );

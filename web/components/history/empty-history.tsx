@@ -12,11 +12,11 @@ export function EmptyHistory({ project, mayPush }: { project: string; mayPush: b
         A run comes here from the command line, or from a pipeline on every commit. Where the command is
         installed:
       </p>
-      <pre className="my-4 overflow-x-auto border-l-[3px] border-ink py-1 pl-4 leading-relaxed">
+      <pre className="my-4 whitespace-pre-wrap break-words border-l-[3px] border-ink py-1 pl-4 leading-relaxed">
         <code>{`steelyard sign-in ${server} --project ${project}\nsteelyard run assembly.yaml --push`}</code>
       </pre>
       <p className="max-w-[72ch]">In a pipeline, with a token of this project in its secrets:</p>
-      <pre className="my-4 overflow-x-auto border-l-[3px] border-ink py-1 pl-4 leading-relaxed">
+      <pre className="my-4 whitespace-pre-wrap break-words border-l-[3px] border-ink py-1 pl-4 leading-relaxed">
         <code>
           {`export STEELYARD_SERVER=${server}\nexport STEELYARD_PROJECT=${project}\nexport STEELYARD_TOKEN=…\nsteelyard check assembly.yaml --push`}
         </code>

@@ -1,6 +1,7 @@
 import { decimalsFor, PLAIN_ROOM, printAddingColumn, scaleFor } from '#core/figures/index.ts';
 import type { GroupTotals, RollUpRecord } from '#core/record/record.ts';
 import { SectionHead } from '#web/components/section-head.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 import type { RunView } from './run-view.ts';
 
 /** Masses by category or by basis; every column adds up to its total as printed. */
@@ -44,43 +45,45 @@ export function GroupsSection({
   return (
     <section>
       <SectionHead title={title}>adds up to the total</SectionHead>
-      <table>
-        <caption className="sr-only">Mass {title.toLowerCase()}</caption>
-        <thead>
-          <tr>
-            <th scope="col">
-              <span className="sr-only">group</span>
-            </th>
-            {columns.map((c) => (
-              <th key={c.head} scope="col" className="n">
-                {c.head} <i>{c.unit}</i>
+      <WideTable label={title}>
+        <table>
+          <caption className="sr-only">Mass {title.toLowerCase()}</caption>
+          <thead>
+            <tr>
+              <th scope="col">
+                <span className="sr-only">group</span>
               </th>
-            ))}
-          </tr>
-        </thead>
-        <tbody>
-          {groups.map((g, i) => (
-            <tr key={g.name}>
-              <th scope="row">{g.name ?? 'none stated'}</th>
               {columns.map((c) => (
-                <td key={c.head} className="n">
-                  {c.figures[i]}
+                <th key={c.head} scope="col" className="n">
+                  {c.head} <i>{c.unit}</i>
+                </th>
+              ))}
+            </tr>
+          </thead>
+          <tbody>
+            {groups.map((g, i) => (
+              <tr key={g.name}>
+                <th scope="row">{g.name ?? 'none stated'}</th>
+                {columns.map((c) => (
+                  <td key={c.head} className="n">
+                    {c.figures[i]}
+                  </td>
+                ))}
+              </tr>
+            ))}
+            <tr className="border-t border-rule-strong">
+              <th scope="row" className="font-semibold">
+                Total
+              </th>
+              {columns.map((c) => (
+                <td key={c.head} className="n font-semibold">
+                  {c.total}
                 </td>
               ))}
             </tr>
-          ))}
-          <tr className="border-t border-rule-strong">
-            <th scope="row" className="font-semibold">
-              Total
-            </th>
-            {columns.map((c) => (
-              <td key={c.head} className="n font-semibold">
-                {c.total}
-              </td>
-            ))}
-          </tr>
-        </tbody>
-      </table>
+          </tbody>
+        </table>
+      </WideTable>
       {[...notes].map((note) => (
         <p key={note} className="soft mt-2 text-sm">
           {note}

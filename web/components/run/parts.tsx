@@ -1,9 +1,9 @@
-import { useState } from 'react';
+import { type ReactNode, useState } from 'react';
 import { decimalsFor, formatPercent, PLAIN_ROOM, scaleFor } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { Button } from '#web/components/button.tsx';
-import { ScrollRegion } from '#web/components/scroll-region.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 import { PartRow } from './part-row.tsx';
 import {
   groupKeys,
@@ -12,11 +12,19 @@ import {
   partsTree,
   printTreeColumn,
   SHARES,
+  type Share,
   sortTree,
 } from './parts-tree.ts';
 import type { RunView } from './run-view.ts';
 
-export const SHARE_HEADS = { mass: 'mass', xx: 'Ixx', yy: 'Iyy', zz: 'Izz' } as const;
+const shareHead = (key: Share) =>
+  key === 'mass' ? (
+    '% mass'
+  ) : (
+    <>
+      % I<sub>{key}</sub>
+    </>
+  );
 
 /** The parts as a tree with their share of mass and of each moment; every level adds up to the one above it. */
 export function PartsSection({
@@ -69,7 +77,7 @@ export function PartsSection({
           </Button>
         </span>
       </SectionHead>
-      <ScrollRegion label="Parts">
+      <WideTable label="Parts">
         <table>
           <caption className="sr-only">
             Parts with their mass and their share of mass and of each moment
@@ -84,7 +92,7 @@ export function PartsSection({
               {SHARES.map((key) => (
                 <SortableHead
                   key={key}
-                  name={`% ${SHARE_HEADS[key]}`}
+                  name={shareHead(key)}
                   value={key}
                   sort={sort}
                   onSort={onSort}
@@ -118,7 +126,7 @@ export function PartsSection({
             </tr>
           </tbody>
         </table>
-      </ScrollRegion>
+      </WideTable>
       {record.conventions.growth && view.on === 'basic' && (
         <p className="soft mt-2 text-sm">
           Masses are basic; shares are of the predicted total, which is{' '}
@@ -141,7 +149,7 @@ function SortableHead({
   onSort,
   numeric = false,
 }: {
-  name: string;
+  name: ReactNode;
   value: PartsSort;
   sort: PartsSort;
   onSort: (sort: PartsSort) => void;

@@ -7,8 +7,8 @@ import {
   TENSOR_ROOM,
 } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
-import { ScrollRegion } from '#web/components/scroll-region.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 import type { RunView } from './run-view.ts';
 
 const BODY_AXES = ['x', 'y', 'z'] as const;
@@ -32,7 +32,7 @@ export function PrincipalSection({ record, view }: { record: RollUpRecord; view:
       <SectionHead title="Principal moments" id="principal">
         about the centre; axes named by the nearest body axis
       </SectionHead>
-      <ScrollRegion label="Principal moments">
+      <WideTable label="Principal moments">
         <table>
           <caption className="sr-only">
             Principal moments about the centre, ascending; direction of each axis in body axes
@@ -64,7 +64,7 @@ export function PrincipalSection({ record, view }: { record: RollUpRecord; view:
             ))}
           </tbody>
         </table>
-      </ScrollRegion>
+      </WideTable>
       {principal.free.length > 0 && <p className="soft mt-2 text-sm">{freeText(principal)}</p>}
       {moments.note && <p className="soft mt-2 text-sm">{moments.note}</p>}
     </section>

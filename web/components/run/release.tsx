@@ -67,7 +67,7 @@ function Names({ release, pushedBy, at }: { release: Release | null; pushedBy: s
             <th scope="row" className="w-28">
               {row.what}
             </th>
-            <td>{row.by ?? <span className="soft">not yet</span>}</td>
+            <td>{row.by ?? <span className="soft whitespace-nowrap">not yet</span>}</td>
             <td className="text-right">{row.at && <Time at={row.at} />}</td>
           </tr>
         ))}

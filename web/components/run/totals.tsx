@@ -9,6 +9,7 @@ import {
 } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { SectionHead } from '#web/components/section-head.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 import type { RunView } from './run-view.ts';
 
 const AXES = ['x', 'y', 'z'] as const;
@@ -37,40 +38,42 @@ export function TotalsSection({ record, view }: { record: RollUpRecord; view: Ru
       <SectionHead title="Totals" id="totals">
         {growth ? 'basic · predicted with growth allowance' : 'basic; the file has no growth table'}
       </SectionHead>
-      <table>
-        <caption className="sr-only">Mass, centre of mass and radii of gyration about the centre</caption>
-        <thead>
-          <tr>
-            <th scope="col">
-              <span className="sr-only">quantity</span>
-            </th>
-            {sides.map((side) => (
-              <th key={side} scope="col" className="n">
-                {side}
+      <WideTable label="Totals">
+        <table>
+          <caption className="sr-only">Mass, centre of mass and radii of gyration about the centre</caption>
+          <thead>
+            <tr>
+              <th scope="col">
+                <span className="sr-only">quantity</span>
               </th>
-            ))}
-          </tr>
-        </thead>
-        <tbody>
-          {groups.map(({ name, unit, rows, decimals }) => (
-            <Fragment key={name}>
-              {rows.map((texts, k) => (
-                <tr key={AXES[k]}>
-                  <th scope="row">
-                    {name} {rows.length > 1 && AXES[k]} <span className="u">{unit}</span>
-                  </th>
-                  {texts.map((text, i) => (
-                    <td key={sides[i]} className="n">
-                      {text}
-                      <Aligned decimals={decimals} most={Math.max(...groups.map((g) => g.decimals))} />
-                    </td>
-                  ))}
-                </tr>
+              {sides.map((side) => (
+                <th key={side} scope="col" className="n">
+                  {side}
+                </th>
               ))}
-            </Fragment>
-          ))}
-        </tbody>
-      </table>
+            </tr>
+          </thead>
+          <tbody>
+            {groups.map(({ name, unit, rows, decimals }) => (
+              <Fragment key={name}>
+                {rows.map((texts, k) => (
+                  <tr key={AXES[k]}>
+                    <th scope="row">
+                      {name} {rows.length > 1 && AXES[k]} <span className="u">{unit}</span>
+                    </th>
+                    {texts.map((text, i) => (
+                      <td key={sides[i]} className="n">
+                        {text}
+                        <Aligned decimals={decimals} most={Math.max(...groups.map((g) => g.decimals))} />
+                      </td>
+                    ))}
+                  </tr>
+                ))}
+              </Fragment>
+            ))}
+          </tbody>
+        </table>
+      </WideTable>
       {growth && record.basic.mass !== 0 && (
         <p className="soft mt-2 text-sm">
           The growth allowance adds {formatPercent(record.predicted.mass / record.basic.mass - 1)} % of the
