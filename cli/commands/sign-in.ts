@@ -12,7 +12,7 @@ export function addSignIn(program: Command, context: Context): void {
       'after',
       `
 The token is asked for at a terminal, or read from standard input:
-  steelyard sign-in --server https://steelyard.example.org --project heron < token`,
+  steelyard sign-in --server https://team.example.org --project heron < token`,
     )
     .action(async (options: PushOptions & { forget?: boolean }) => {
       const { signIn } = await import('../push/sign-in.ts');

@@ -24,7 +24,7 @@ export async function report(
     for (const line of linesOfSent(outcome.sent, settings)) say(line);
     for (const path of outcome.without)
       say(
-        `warning ${INPUT_MISSING}: ${path} is not on the server, and was not found as it was rolled up; that run cannot be recomputed there`,
+        `warning ${INPUT_MISSING}: ${path} is not on the server; it was not found as it was rolled up, or is larger than the server takes. That run cannot be recomputed there`,
       );
     if (outcome.elsewhere > 0) say(`${count(outcome.elsewhere)} left to another process that sends them`);
   }

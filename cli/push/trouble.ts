@@ -96,10 +96,10 @@ export function troubleOfConnection(error: unknown, server: string, attempts: nu
 }
 
 export const connectionCode = (error: unknown): string => {
-  const { name, code, cause } = error as { name?: string; code?: unknown; cause?: { code?: unknown } };
+  const { name, message, cause } = error as Error & { cause?: { code?: unknown; message?: unknown } };
   if (name === 'TimeoutError') return name;
   if (typeof cause?.code === 'string') return cause.code;
-  return typeof code === 'string' ? code : 'the connection broke';
+  return `the connection broke (${typeof cause?.message === 'string' ? cause.message : message})`;
 };
 
 /** Trying again does not mend a certificate, nor a server that speaks no TLS. */

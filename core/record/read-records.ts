@@ -14,7 +14,8 @@ export function readRecords(text: string, file: string): RollUpRecord[] {
   const faults: Fault[] = [];
   const records = values.flatMap((value, i) => {
     const result = recordSchema.safeParse(value);
-    if (result.success) return [result.data];
+    // The value itself, not the checked copy: that has lost the keys of later versions.
+    if (result.success) return [value as RollUpRecord];
     for (const issue of result.error.issues.slice(0, 3)) faults.push(shapeFault(issue, i, file));
     return [];
   });

@@ -449,16 +449,8 @@ describe('steelyard push RECORD', () => {
   it('sends many records in batches of the size that the contract bounds', async () => {
     const server = await PushServer.start();
     const test = pusher(server);
-    const { stdout } = await test.steelyard('run', 'buoy.yaml', '--format', 'ndjson');
-    const line = stdout.split('\n')[0]!;
     const count = 2 * BATCH_AT_MOST + 5;
-    const lines = Array.from({ length: count }, () => line);
-    test.file(
-      'many.ndjson',
-      lines
-        .map((l, i) => l.replace(/"at":"[^"]+"\}\}?$/, (s) => s.replace('"at":"', `"at":"${i} `)))
-        .join('\n'),
-    );
+    test.file('many.ndjson', await manyRecords(test, count));
     expect((await test.steelyard('push', 'many.ndjson')).status).toBe(0);
     expect(server.to('/runs').map(({ body }) => JSON.parse(body.toString()).runs.length)).toEqual([
       50, 50, 5,
@@ -497,11 +489,7 @@ describe('the tray', () => {
     await test.steelyard('run', 'buoy.yaml', '--push', '--retries', '0');
     const server = await PushServer.start();
     test.withEnv({ STEELYARD_SERVER: server.url });
-    const lines: string[] = [];
-    const { stdout } = await test.steelyard('run', 'buoy.yaml', '--format', 'ndjson');
-    for (let i = 0; i < 120; i++)
-      lines.push(stdout.split('\n')[0]!.replace(/"at":"(\d{4}-[^"]+)"/, `"at":"${i} $1"`));
-    test.file('many.ndjson', lines.join('\n'));
+    test.file('many.ndjson', await manyRecords(test, 120));
     server.always(() => ({ status: 503 }));
     await test.steelyard('push', 'many.ndjson', '--retries', '0');
     server.healed();
@@ -569,4 +557,14 @@ describe('the tray', () => {
 
 async function until(holds: () => boolean): Promise<void> {
   while (!holds()) await new Promise((resolve) => setTimeout(resolve, 20));
+}
+
+/** NDJSON of one record as if it had been computed many times. */
+async function manyRecords(test: CliTest, count: number): Promise<string> {
+  const { stdout } = await test.steelyard('run', 'buoy.yaml', '--state', 'afloat');
+  const [record] = JSON.parse(stdout);
+  return Array.from({ length: count }, (_, i) => {
+    const at = new Date(Date.UTC(2030, 0, 1, 0, i)).toISOString();
+    return JSON.stringify({ ...record, provenance: { ...record.provenance, at } });
+  }).join('\n');
 }
