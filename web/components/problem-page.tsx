@@ -8,18 +8,17 @@ import { ServerAway } from './server-away.tsx';
 /** A page that cannot be shown: not found, no permission, or the server away, each with a way on. */
 export function ProblemPage({ error, retry }: { error: unknown; retry: () => void }) {
   const problem = asProblem(error);
-  if (problem.status === 404) return <NotFound detail={problem.detail} />;
+  if (problem.status === 404) return <NotFound detail={problem.detail} hint={problem.hint} />;
   if (problem.status === 403) return <NoPermission detail={problem.detail} hint={problem.hint} />;
   return <ServerAway error={error} retry={retry} />;
 }
 
-export function NotFound({ detail }: { detail?: string }) {
+export function NotFound({ detail, hint }: { detail?: string | undefined; hint?: string | undefined }) {
   return (
     <>
       <PageHead title="Nothing hangs here">
-        {detail !== undefined
-          ? asSentence(detail)
-          : 'No page has this address. It may have been mistyped, or what it led to was removed.'}
+        <p>{asSentence(detail ?? 'No page has this address')}</p>
+        <p>{asSentence(hint ?? 'It may have been mistyped, or what it led to was removed')}</p>
       </PageHead>
       <p className="acts">
         <ActionLink to={PATHS.projects}>To your projects</ActionLink>

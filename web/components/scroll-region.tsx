@@ -12,9 +12,9 @@ export function ScrollRegion({
   children: ReactNode;
 }) {
   return (
-    // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls must take the focus to scroll by keyboard.
     <section
       aria-label={`${label}: table`}
+      // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls must take the focus to scroll by keyboard.
       tabIndex={0}
       className={`scroll ${keepFirst ? 'keep-first' : ''}`}
     >
