@@ -18,7 +18,7 @@ export async function explainSides(
   const request = { states: options.state, set: options.set };
   const a = await loadGiven(nameA, request, context);
   const b = await loadGiven(nameB, request, context);
-  const found = explain(a.given, b.given, b.given.turn ? { rotation: b.given.turn } : {});
+  const found = explain(a.given, b.given);
   const render = (format: string, to: Context | null) =>
     format === 'json'
       ? formatJson({ a: a.name, b: b.name, ...found })

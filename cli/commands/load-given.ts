@@ -6,6 +6,7 @@ import { openProject } from '#core/model/open-project.ts';
 import type { ProjectSource } from '#core/model/source.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { type GivenTensor, givenTensor } from '#core/rollup/given-tensor.ts';
+import { setValues } from '#core/rollup/set-values.ts';
 import { sha256 } from '../project/disk-source.ts';
 import type { Context } from './context.ts';
 import { readRecordFile } from './load-side.ts';
@@ -51,7 +52,7 @@ async function fromText(text: string, context: Context): Promise<GivenTensor> {
     readBytes: () => ({ bytes: new Uint8Array(), sha256: '' }),
   };
   context.source = source;
-  return givenTensor(await openProject(file, source), 'it', 'nominal')!;
+  return { ...givenTensor(await openProject(file, source), 'it', 'nominal')!, axes: 'unknown' };
 }
 
 /** A `body` of an assembly file, as its file writes it. */
@@ -63,20 +64,28 @@ async function fromBody(
 ): Promise<GivenTensor | null> {
   const { source, path: inProject } = openFile(file, context);
   const project = await openProject(inProject, source);
-  return givenTensor(project, path, request.states[0] ?? project.root.states[0]!.name);
+  if (request.states.length > 1) throw new InputError([notOneState(request.states, file)]);
+  const state = request.states[0] ?? project.root.states[0]!.name;
+  return givenTensor(project, path, state, setValues(project.root, request.set));
 }
 
 function oneState(records: readonly RollUpRecord[], { states }: RollUpRequest, file: string): RollUpRecord {
   const chosen = states.length > 0 ? records.filter((r) => states.includes(r.state)) : records;
   if (chosen.length === 1) return chosen[0]!;
   throw new InputError([
-    {
-      code: 'CALL_STATE',
-      message: `expected one state of ${file}, found ${chosen.length === 0 ? 'none' : chosen.map((r) => r.state).join(', ')}`,
-      hint: 'choose one with --state',
-    },
+    notOneState(
+      chosen.map((r) => r.state),
+      file,
+      records.map((r) => r.state),
+    ),
   ]);
 }
+
+const notOneState = (found: readonly string[], file: string, known: readonly string[] = []) => ({
+  code: 'CALL_STATE',
+  message: `expected one state of ${file}, found ${found.join(', ') || 'none'}`,
+  hint: `choose one with --state${known.length > 0 ? `; known: ${known.join(', ')}` : ''}`,
+});
 
 const EXACT: Symmetric3 = [0, 0, 0, 0, 0, 0];
 
@@ -101,6 +110,7 @@ function fromRecord(record: RollUpRecord, path: string | null, name: string): Gi
     inertia: fromRows(rows),
     about: 'centre',
     products: 'negative',
+    axes: 'assembly',
     halfUnits: EXACT,
   };
 }

@@ -22,17 +22,23 @@ export function isAtOrBelow(path: string, root: string): boolean {
 const childrenOf = (part: PartModel): readonly PartModel[] =>
   part.shape.kind === 'include' ? part.shape.file.parts : part.parts;
 
+/** A part on the way to one inside it, and the copy that the path picks of it. */
+export interface Step {
+  readonly part: PartModel;
+  readonly copy: number | null;
+}
+
 /**
  * Finds a part by path (`boom/access hole`, `servo[2]`, `tailplane/spar`).
  *
- * @returns the part, or the first name that does not exist with the nearest known one
+ * @returns the part and the way to it, or the first name that does not exist with the nearest known one
  */
 export function findPart(
   parts: readonly PartModel[],
   path: string,
-): { part: PartModel } | { unknown: string; nearest: string | undefined } {
+): { part: PartModel; way: readonly Step[] } | { unknown: string; nearest: string | undefined } {
   let here = parts;
-  let found: PartModel | undefined;
+  const way: Step[] = [];
   for (const step of path.split('/')) {
     const { name, copy } = readStep(step);
     const next = here.find((p) => p.name === name);
@@ -44,8 +50,8 @@ export function findPart(
           here.map((p) => p.name),
         ),
       };
-    found = next;
+    way.push({ part: next, copy });
     here = childrenOf(next);
   }
-  return found ? { part: found } : { unknown: path, nearest: undefined };
+  return { part: way.at(-1)!.part, way };
 }

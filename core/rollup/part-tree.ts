@@ -231,6 +231,17 @@ export function judgeNet(
 const BASIC = ['basic'] as const;
 const BASIC_AND_PREDICTED = ['basic', 'predicted'] as const;
 
+/** The scope of a file that a part includes: its parameters as the part sets them, its state as the part chooses it. */
+export function includedScope(
+  part: PartModel,
+  shape: PartModel['shape'] & { kind: 'include' },
+  path: string,
+  scope: Scope,
+): Scope {
+  const set = new Map([...shape.with].map(([slot, quantity]) => [slot, evaluate(quantity, scope)]));
+  return openScope(shape.file, includedState(part, shape, scope), set, scope.run, path, scope);
+}
+
 /** The parts of an included file, evaluated in a scope of its own. */
 function includedMembers(
   part: PartModel,
@@ -239,10 +250,8 @@ function includedMembers(
   attributes: Omit<Inherited, 'hostDensity'>,
   scope: Scope,
 ): Member[] {
-  const { file } = shape;
-  const set = new Map([...shape.with].map(([slot, quantity]) => [slot, evaluate(quantity, scope)]));
-  const inner = openScope(file, includedState(part, shape, scope), set, scope.run, path, scope);
-  const members = membersOf(file.parts, '', { ...attributes, hostDensity: null }, inner);
+  const inner = includedScope(part, shape, path, scope);
+  const members = membersOf(shape.file.parts, '', { ...attributes, hostDensity: null }, inner);
   checkCopies(omittedIn(inner), members, inner);
   return members;
 }

@@ -51,14 +51,7 @@ export interface RollUpOptions {
 export function rollUp(project: Project, options: RollUpOptions): RollUp {
   const { root, source } = project;
   checkState(project, options.state);
-  const run: Run = {
-    source,
-    faults: new FaultList(),
-    warnings: [],
-    meshes: options.meshes ?? new Map(),
-    meshInputs: options.meshInputs ?? new Map(),
-    withoutMaturity: [],
-  };
+  const run = newRun(source, options);
   const scope = openScope(root, options.state, options.set ?? new Map(), run, '', null);
   run.faults.check();
   const members = membersOf(root.parts, '', NOTHING_INHERITED, scope);
@@ -100,12 +93,19 @@ export function rollUp(project: Project, options: RollUpOptions): RollUp {
   };
 }
 
+/** A run that has gathered nothing yet. */
+export const newRun = (
+  source: Run['source'],
+  { meshes = new Map(), meshInputs = new Map() }: Pick<RollUpOptions, 'meshes' | 'meshInputs'>,
+): Run => ({ source, faults: new FaultList(), warnings: [], meshes, meshInputs, withoutMaturity: [] });
+
 const EMPTY: Both<Moments> = {
   basic: { material: null, cut: null },
   predicted: { material: null, cut: null },
 };
 
-function checkState(project: Project, state: string): void {
+/** @throws InputError MODEL_UNKNOWN_STATE */
+export function checkState(project: Project, state: string): void {
   const names = project.root.states.map((s) => s.name);
   if (names.includes(state)) return;
   const nearest = nearestName(state, names);

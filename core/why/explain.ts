@@ -1,19 +1,16 @@
+import { type Placement, placePoint } from '../inertia/placement.ts';
 import { judgeTensor } from '../inertia/possibility.ts';
 import { moveToCentre } from '../inertia/possible-readings.ts';
-import { apply, transpose } from '../linalg/matrix3.ts';
-import { type Matrix3, type Symmetric3, trace, turnSymmetric } from '../linalg/symmetric3.ts';
+import { apply } from '../linalg/matrix3.ts';
+import { IDENTITY, type Matrix3, type Symmetric3, trace, turnSymmetric } from '../linalg/symmetric3.ts';
 import { norm, subtract, type Vector3 } from '../linalg/vector3.ts';
 import type { GivenTensor } from '../rollup/given-tensor.ts';
 import { AXIS_READINGS, type AxisReading } from './axis-readings.ts';
 import { ELEMENT_ORDERS } from './element-orders.ts';
+import { type Framing, framingsOf } from './framings.ts';
 import { UNIT_SLIPS } from './inertia-units.ts';
 import { centralUnder, pointReadings } from './point-readings.ts';
 import { type Explanation, type Explanations, type Step, sentenceOf, summaryOf } from './sentence.ts';
-
-export interface ExplainOptions {
-  /** Rotation that takes b's axes into a's, where one is known: its transpose and its absence are then tried. */
-  readonly rotation?: Matrix3;
-}
 
 /** A residual within this share of the largest element is no longer a rounding of the digits given. */
 const NEAR = 0.01;
@@ -21,9 +18,10 @@ const NEAR = 0.01;
 const SAME = 1e-6;
 
 /**
- * Which conventions make two tensors disagree: enumerates sign of products × reference point (centre, origin, shift
- * twice, shift backwards) × axes (24 turns and their mirror images; a known rotation transposed or left out) × unit
- * factors × order of the elements for b, and ranks the readings under which b is a.
+ * Which conventions make two tensors disagree. Both are brought into common axes; then it enumerates sign of products ×
+ * reference point (centre, origin, shift twice, shift backwards) × axes (24 turns and their mirror images; a known
+ * rotation transposed or left out) × unit factors × order of the elements for b, and ranks the readings under which b is
+ * a.
  *
  * A reading explains when every element agrees within half a unit of the digits given (1e-6 of the largest where none are
  * known). Of readings that explain, those with the fewest slips come first; a reading that needs all slips of another and
@@ -33,18 +31,53 @@ const SAME = 1e-6;
  * @param a what is taken as right
  * @param b what is to be explained
  */
-export function explain(a: GivenTensor, b: GivenTensor, options: ExplainOptions = {}): Explanations {
-  const target = centralOf(a);
-  const size = Math.max(...target.map(Math.abs));
+export function explain(a: GivenTensor, b: GivenTensor): Explanations {
+  const central = centralOf(a);
+  const points = numberReadings(b).flatMap((stage) => centralReadings(stage, b, a, central));
   const found: Candidate[] = [];
-  for (const stage of numberReadings(b))
-    for (const point of centralReadings(stage, b, a, target))
-      for (const turned of turnReadings(point, options.rotation))
-        for (const axis of AXIS_READINGS) consider(turned, axis, a, b, target, size, found);
-  return rank(found, target);
+  for (const framing of framingsOf(a, b)) {
+    const target = targetIn(framing.a, central, a);
+    const centre = b.centre && placePoint(framing.b, b.centre);
+    for (const point of points) {
+      const reading = readingIn(framing, point);
+      for (const axis of AXIS_READINGS) consider(reading, axis, target, centre, found);
+    }
+  }
+  return rank(found);
 }
 
+/** What is taken as right, in the common axes. */
+interface Target {
+  /** About the centre, products negative [kg·m²]. */
+  readonly tensor: Symmetric3;
+  readonly halfUnits: Symmetric3;
+  readonly centre: Vector3 | null;
+  /** Its largest element. */
+  readonly size: number;
+}
+
+const targetIn = (placement: Placement, central: Symmetric3, a: GivenTensor): Target => {
+  const tensor = turnedInto(placement, central);
+  return {
+    tensor,
+    halfUnits: turnedHalfUnits(placement.turn, a.halfUnits),
+    centre: a.centre && placePoint(placement, a.centre),
+    size: Math.max(...tensor.map(Math.abs)),
+  };
+};
+
+const turnedInto = ({ turn }: Placement, j: Symmetric3): Symmetric3 =>
+  turn === IDENTITY ? j : turnSymmetric(turn, j);
+
+const readingIn = ({ b, steps }: Framing, reading: Reading): Reading => ({
+  inertia: turnedInto(b, reading.inertia),
+  halfUnits: turnedHalfUnits(b.turn, reading.halfUnits),
+  steps: [...reading.steps, ...steps],
+  cost: reading.cost + steps.length,
+});
+
 interface Candidate {
+  readonly target: Target;
   readonly steps: readonly Step[];
   readonly tensor: Symmetric3;
   readonly residual: number;
@@ -125,7 +158,7 @@ function centralReadings(stage: Reading, b: GivenTensor, a: GivenTensor, target:
     const shift = -trace(central([0, 0, 0, 0, 0, 0]));
     const wanted = (trace(target) + shift) / trace(stage.inertia);
     const units = UNIT_SLIPS.flatMap((slip, i) =>
-      Math.abs(slip.ratio / wanted - 1) > 2 * NEAR
+      !(Math.abs(slip.ratio / wanted - 1) <= 2 * NEAR)
         ? []
         : [
             make(
@@ -142,51 +175,35 @@ function centralReadings(stage: Reading, b: GivenTensor, a: GivenTensor, target:
 const scaled = (j: Symmetric3, k: number): Symmetric3 =>
   k === 1 ? j : (j.map((x) => x * k) as unknown as Symmetric3);
 
-function turnReadings(reading: Reading, rotation: Matrix3 | undefined): Reading[] {
-  if (!rotation) return [reading];
-  const with_ = (matrix: Matrix3, step: Step | null, cost: number): Reading => ({
-    ...reading,
-    inertia: turnSymmetric(matrix, reading.inertia),
-    steps: step ? [...reading.steps, step] : reading.steps,
-    cost: reading.cost + cost,
-  });
-  return [
-    with_(rotation, null, 0),
-    with_(transpose(rotation), { kind: 'turn', words: 'turned by the transpose of its rotation' }, 1),
-    {
-      ...reading,
-      steps: [...reading.steps, { kind: 'turn', words: 'not turned by its rotation' }],
-      cost: reading.cost + 1,
-    },
-  ];
-}
-
 function consider(
   reading: Reading,
   axis: AxisReading,
-  a: GivenTensor,
-  b: GivenTensor,
-  target: Symmetric3,
-  size: number,
+  target: Target,
+  centre: Vector3 | null,
   found: Candidate[],
 ): void {
   const tensor = axis.kind === 'none' ? reading.inertia : turnSymmetric(axis.turn, reading.inertia);
-  const residual = Math.max(...tensor.map((x, k) => Math.abs(x - target[k]!))) / size;
+  const gaps = tensor.map((x, k) => Math.abs(x - target.tensor[k]!));
+  const residual = Math.max(...gaps.map((gap) => shareOf(gap, target.size)));
   if (!(residual < NEAR) && axis.kind !== 'none') return;
   const half = turnedHalfUnits(axis.turn, reading.halfUnits);
   const fit = Math.max(
-    ...tensor.map((x, k) => Math.abs(x - target[k]!) / (half[k]! + a.halfUnits[k]! + SAME * size)),
+    ...gaps.map((gap, k) => shareOf(gap, half[k]! + target.halfUnits[k]! + SAME * target.size)),
   );
-  for (const { steps, cost, matrix } of axisSteps(axis, a, b))
+  for (const { steps, cost, matrix } of axisSteps(axis, target.centre, centre))
     found.push({
+      target,
       tensor,
       residual,
       fit,
       steps: [...reading.steps, ...steps],
       cost: reading.cost + cost,
-      centreGap: centreGap(matrix, a, b),
+      centreGap: centreGap(matrix, target.centre, centre),
     });
 }
+
+/** Nothing is no share of anything, also of nothing. */
+const shareOf = (part: number, whole: number): number => (part === 0 ? 0 : part / whole);
 
 /** Half units go with their elements; signs do not matter to them. */
 function turnedHalfUnits(turn: Matrix3, half: Symmetric3): Symmetric3 {
@@ -197,16 +214,20 @@ function turnedHalfUnits(turn: Matrix3, half: Symmetric3): Symmetric3 {
 const MIRROR_COST = 0.05;
 
 /** A reading of axes as steps: a turn, a mirror image, or, where no centre tells, both in one. */
-function axisSteps(axis: AxisReading, a: GivenTensor, b: GivenTensor) {
-  const known = hasCentre(a) && hasCentre(b);
+function axisSteps(axis: AxisReading, a: Vector3 | null, b: Vector3 | null) {
+  const turnGap = centreGap(axis.turn, a, b);
+  const mirrorGap = centreGap(axis.mirror, a, b);
+  const known = turnGap !== null && mirrorGap !== null;
+  const isMirror = known && mirrorGap < turnGap;
   if (axis.kind === 'none')
-    return known && centreGap(axis.turn, a, b)! > centreGap(axis.mirror, a, b)!
+    // Every tensor is its own image through the origin: only a centre that lands there says that this was done.
+    return isMirror && mirrorGap < NEAR
       ? [{ steps: [step('mirror', axis.mirrorWords)], cost: 1.4, matrix: axis.mirror }]
       : [{ steps: [] as Step[], cost: 0, matrix: axis.turn }];
   const base = axis.kind === 'signs' ? 1 : 1.2;
   const turn = { steps: [step('axes', axis.turnWords)], cost: base, matrix: axis.turn };
   const mirror = { steps: [step('mirror', axis.mirrorWords)], cost: base + MIRROR_COST, matrix: axis.mirror };
-  if (known) return centreGap(axis.mirror, a, b)! < centreGap(axis.turn, a, b)! ? [mirror] : [turn];
+  if (known) return [isMirror ? mirror : turn];
   if (axis.kind === 'permutation') return [turn];
   const words = `${axis.turnWords} or ${axis.mirrorWords} (the tensor cannot tell; compare the centres)`;
   return [{ ...turn, steps: [step('axes', words)] }];
@@ -214,16 +235,15 @@ function axisSteps(axis: AxisReading, a: GivenTensor, b: GivenTensor) {
 
 const step = (kind: Step['kind'], words: string): Step => ({ kind, words });
 
-const hasCentre = (given: GivenTensor): boolean => given.centre !== null && norm(given.centre) > 0;
-
-function centreGap(matrix: Matrix3, a: GivenTensor, b: GivenTensor): number | null {
-  if (!hasCentre(a) || !hasCentre(b)) return null;
-  return norm(subtract(apply(matrix, b.centre!), a.centre!)) / norm(a.centre!);
+/** How far b's centre is from a's when b's axes are read so, as a share of its size; null where either is not given. */
+function centreGap(matrix: Matrix3, a: Vector3 | null, b: Vector3 | null): number | null {
+  if (a === null || b === null || norm(a) === 0 || norm(b) === 0) return null;
+  return norm(subtract(apply(matrix, b), a)) / norm(a);
 }
 
 const MOST = 6;
 
-function rank(found: readonly Candidate[], target: Symmetric3): Explanations {
+function rank(found: readonly Candidate[]): Explanations {
   const explained = found.filter((c) => c.fit <= 1).sort(byCost);
   const kept: Candidate[] = [];
   for (const candidate of explained) {
@@ -242,7 +262,7 @@ function rank(found: readonly Candidate[], target: Symmetric3): Explanations {
     agree: kept[0]?.steps.length === 0,
     explained: kept.length > 0,
     explanations,
-    differences: differencesOf(plain.tensor, target),
+    differences: differencesOf(plain.tensor, plain.target.tensor),
     summary: summaryOf(explanations, kept.length > 0),
   };
 }
@@ -251,13 +271,14 @@ const byCost = (x: Candidate, y: Candidate): number =>
   x.cost - y.cost || (x.centreGap ?? 0) - (y.centreGap ?? 0) || x.residual - y.residual;
 
 function toExplanation(candidate: Candidate): Explanation {
+  const centresAgree = candidate.centreGap === null ? null : candidate.centreGap < NEAR;
   return {
-    sentence: sentenceOf(candidate.steps),
+    sentence: sentenceOf(candidate.steps, centresAgree),
     steps: [...candidate.steps],
     residual: candidate.residual,
     withinDigits: candidate.fit <= 1,
     possible: judgeTensor(candidate.tensor).possible,
-    centresAgree: candidate.centreGap === null ? null : candidate.centreGap < NEAR,
+    centresAgree,
   };
 }
 

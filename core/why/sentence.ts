@@ -30,8 +30,9 @@ export interface Explanations {
   summary: string;
 }
 
-export function sentenceOf(steps: readonly Step[]): string {
-  if (steps.length === 0) return 'B is A: the two agree as they are declared.';
+export function sentenceOf(steps: readonly Step[], centresAgree: boolean | null): string {
+  if (steps.length === 0)
+    return `B is A: the two agree as they are declared${centresAgree === false ? '; their centres do not' : ''}.`;
   return `B is A ${steps.map((s) => s.words).join(', ')}.`;
 }
 

@@ -46,6 +46,72 @@ describe('steelyard why', () => {
     expect(whole.agree).toBe(true);
   });
 
+  const PLACED = `
+    assembly: placed
+    units: { length: mm, mass: g }
+    parts:
+      - name: bay
+        at: [ 100, 0, 0 ]
+        rotate: [ { x: 20 deg } ]
+        parts:
+          - name: rx
+            body:
+              mass: 30
+              centre: [ -12, 2, 3 ]
+              inertia: { xx: 5200, yy: 8100, zz: 9900, xy: -120, xz: 80, yz: 45, about: centre, products: negative }
+            at: [ 40, 10, 5 ]
+            rotate: [ { z: 30 deg } ]
+            repeat: { mirror: xz }
+  `;
+  const SAME =
+    '{ mass: 30 g, centre: [ -12 mm, 2 mm, 3 mm ], inertia: { xx: 5200 g*mm^2, yy: 8100 g*mm^2, zz: 9900 g*mm^2, xy: -120 g*mm^2, xz: 80 g*mm^2, yz: 45 g*mm^2, about: centre, products: negative } }';
+
+  it('compares a body that its assembly turns, copies and mirrors in common axes', async () => {
+    const test = new CliTest().file('f.yaml', PLACED);
+    await test.steelyard('run', 'f.yaml', '-o', 'run.json');
+    for (const [a, b] of [
+      ['f.yaml#bay/rx', 'f.yaml#bay/rx'],
+      ['f.yaml#bay/rx', SAME],
+      [SAME, 'f.yaml#bay/rx'],
+      ['f.yaml#bay/rx', 'run.json#bay/rx[1]'],
+      ['run.json#bay/rx[1]', 'f.yaml#bay/rx[1]'],
+      ['run.json#bay/rx[2]', 'f.yaml#bay/rx[2]'],
+    ] as const) {
+      const found = await test.json<Explanations>('why', a, b);
+      expect([a, b, found.agree, found.explanations[0]!.centresAgree]).toEqual([a, b, true, true]);
+    }
+  });
+
+  it('takes a body with the parameters and the state asked for', async () => {
+    const test = new CliTest().file(
+      'f.yaml',
+      VENDOR('xx: 5200 * k, yy: 8100 * k, zz: 9900 * k, xy: 0, xz: 0, yz: 0, about: centre').replace(
+        'parts:',
+        'parameters: { k: 1 }\n  states: { one: {}, two: { parameters: { k: 2 } } }\n  parts:',
+      ),
+    );
+    const differences = async (...more: string[]) =>
+      (
+        await test.json<Explanations>(
+          'why',
+          'f.yaml#receiver',
+          '{ mass: 38.5 g, inertia: { xx: 5200 g*mm^2, yy: 8100 g*mm^2, zz: 9900 g*mm^2, xy: 0, xz: 0, yz: 0, about: centre } }',
+          ...more,
+        )
+      ).differences.map((d) => d.a / d.b);
+    expect(await differences()).toEqual([]);
+    expect(await differences('--state', 'two')).toEqual([2, 2, 2].map((x) => expect.closeTo(x, 12)));
+    expect(await differences('--set', 'k=3')).toEqual([3, 3, 3].map((x) => expect.closeTo(x, 12)));
+    for (const [more, code] of [
+      [['--set', 'q=3'], 'SET_UNKNOWN_PARAMETER'],
+      [['--state', 'nope'], 'MODEL_UNKNOWN_STATE'],
+      [['--state', 'one,two'], 'CALL_STATE'],
+    ] as const) {
+      const { status, stderr } = await test.steelyard('why', 'f.yaml#receiver', 'f.yaml#receiver', ...more);
+      expect([status, stderr]).toEqual([2, expect.stringContaining(code)]);
+    }
+  });
+
   it('answers a wrong side with what is expected', async () => {
     const test = new CliTest().file('v.yaml', VENDOR(MAKER));
     for (const [side, code] of [

@@ -15,6 +15,7 @@ const given = (change: Partial<GivenTensor> & Pick<GivenTensor, 'inertia'>): Giv
   centre: null,
   about: 'centre',
   products: 'negative',
+  axes: 'unknown',
   halfUnits: EXACT,
   ...change,
 });
@@ -36,8 +37,8 @@ const plus = (a: Symmetric3, b: Symmetric3, k = 1) => a.map((x, i) => x + k * b[
 const times = (a: Symmetric3, k: number) => a.map((x) => x * k) as unknown as Symmetric3;
 const negated = (j: Symmetric3): Symmetric3 => [j[0], j[1], j[2], -j[3], -j[4], -j[5]];
 
-const first = (b: GivenTensor, a = A, rotation?: Matrix3) => {
-  const found = explain(a, b, rotation ? { rotation } : {});
+const first = (b: GivenTensor, a = A) => {
+  const found = explain(a, b);
   expect(found.explained, found.summary).toBe(true);
   return found.explanations[0]!;
 };
@@ -133,7 +134,7 @@ describe('explain', () => {
     expect(turnSymmetric(turn, b.inertia)).toEqual(J);
   });
 
-  it('finds a rotation that was transposed or left out', () => {
+  describe('of a part that its assembly turns by R', () => {
     const [c, s] = [0.8, 0.6];
     const rotation: Matrix3 = [
       [c, -s, 0],
@@ -145,13 +146,64 @@ describe('explain', () => {
       [-s, c, 0],
       [0, 0, 1],
     ];
-    const a = given({ inertia: J });
-    // A = R B Rᵀ is right; the other two are slips.
-    expect(explain(a, given({ inertia: turnSymmetric(transposed, J) }), { rotation }).agree).toBe(true);
-    expect(first(given({ inertia: turnSymmetric(rotation, J) }), a, rotation).steps[0]!.words).toBe(
-      'turned by the transpose of its rotation',
-    );
-    expect(first(given({ inertia: J }), a, rotation).steps[0]!.words).toBe('not turned by its rotation');
+    const offset: Vector3 = [0.4, -0.1, 0.25];
+    const centre: Vector3 = [0.1, 0.02, -0.03];
+    const axes = { turn: rotation, offset };
+    const whole = (inertia: Symmetric3, more: Partial<GivenTensor> = {}) =>
+      given({ inertia, axes: 'assembly', ...more });
+    const part = (inertia: Symmetric3, more: Partial<GivenTensor> = {}) => given({ inertia, axes, ...more });
+
+    it('brings it beside the assembly’s own numbers, whichever side it is on', () => {
+      // The same body in the assembly: R J Rᵀ, offset + R c.
+      const turnedCentre = apply(rotation, centre).map((x, k) => x + offset[k]!) as unknown as Vector3;
+      const own = part(J, { mass: 2, centre });
+      const placed = whole(turnSymmetric(rotation, J), { mass: 2, centre: turnedCentre });
+      for (const found of [explain(own, placed), explain(placed, own)]) {
+        expect(found.agree).toBe(true);
+        expect(found.explanations[0]!.centresAgree).toBe(true);
+        expect(found.summary).toBe('B is A: the two agree as they are declared.');
+      }
+    });
+
+    it('finds the rotation transposed or left out, whichever side it is on', () => {
+      const slipped = whole(turnSymmetric(transposed, J));
+      const unturned = whole(J);
+      for (const [a, b] of [
+        [part(J), slipped],
+        [slipped, part(J)],
+      ] as const)
+        expect(first(b, a).sentence).toBe('B is A turned by the transpose of its rotation.');
+      for (const [a, b] of [
+        [part(J), unturned],
+        [unturned, part(J)],
+      ] as const)
+        expect(first(b, a).sentence).toBe('B is A not turned by its rotation.');
+    });
+
+    it('takes it as it is written beside itself and beside numbers whose axes nobody knows', () => {
+      expect(explain(part(J), part(J)).agree).toBe(true);
+      expect(explain(part(J), given({ inertia: J })).agree).toBe(true);
+      expect(explain(given({ inertia: J }), part(J)).agree).toBe(true);
+      const there = given({ inertia: turnSymmetric(rotation, J) });
+      expect(first(there, part(J)).sentence).toBe('B is A turned by its rotation.');
+      expect(first(part(J), there).sentence).toBe('B is A not turned by its rotation.');
+    });
+
+    it('calls no two bodies mirror images because their centres are told in different axes', () => {
+      const apart = whole(J, { mass: 2, centre: [-0.3, -0.02, 0.01] });
+      const found = explain(whole(J, { mass: 2, centre }), apart);
+      expect([found.agree, found.summary]).toEqual([
+        true,
+        'B is A: the two agree as they are declared; their centres do not.',
+      ]);
+    });
+  });
+
+  it('says that two tensors of nothing agree, and one of nothing with none other', () => {
+    const nothing = given({ inertia: [0, 0, 0, 0, 0, 0] });
+    expect(explain(nothing, nothing).agree).toBe(true);
+    expect(explain(A, nothing).explained).toBe(false);
+    expect(explain(nothing, A).explained).toBe(false);
   });
 
   it('keeps to the digits given, and says how near it came where nothing explains', () => {
