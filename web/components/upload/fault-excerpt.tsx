@@ -1,3 +1,4 @@
+import { useLayoutEffect, useRef } from 'react';
 import { plainText } from '#core/figures/plain-text.ts';
 
 const AROUND = 2;
@@ -19,13 +20,16 @@ export function FaultExcerpt({
   column: number;
   length: number;
 }) {
+  const region = useRef<HTMLElement>(null);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: another fault stands elsewhere in its line.
+  useLayoutEffect(() => showBlamed(region.current), [line, column]);
   if (lines?.[line - 1] === undefined) return null;
   const first = Math.max(1, line - AROUND);
   const shown = lines.slice(first - 1, line + AROUND);
   const width = String(first + shown.length - 1).length;
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: what scrolls must take the focus to scroll by keyboard.
-    <section className="excerpt" tabIndex={0} aria-label={`Line ${line} in its place`}>
+    <section ref={region} className="excerpt" tabIndex={0} aria-label={`Line ${line} in its place`}>
       <pre>
         {shown.map((text, i) => {
           const number = first + i;
@@ -39,6 +43,14 @@ export function FaultExcerpt({
       </pre>
     </section>
   );
+}
+
+/** Scrolls a narrow region sideways until the faulty text is seen. */
+function showBlamed(region: HTMLElement | null): void {
+  const blamed = region?.querySelector<HTMLElement>('.blamed');
+  if (!region || !blamed) return;
+  const past = blamed.getBoundingClientRect().right - region.getBoundingClientRect().right;
+  if (past > 0) region.scrollLeft += past + 24;
 }
 
 function Blamed({ text, column, length }: { text: string; column: number; length: number }) {
