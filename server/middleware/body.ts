@@ -28,7 +28,7 @@ function refuseDepth(_: unknown, __: unknown, bytes: Buffer): void {
   }
 }
 
-const json = express.json({ limit: '256kb', verify: refuseDepth });
+const json = express.json({ limit: '512kb', verify: refuseDepth });
 const pushJson = express.json({ limit: PUSH_BYTES_AT_MOST, verify: refuseDepth });
 const raw = express.raw({ type: () => true, limit: INPUT_BYTES_AT_MOST });
 
