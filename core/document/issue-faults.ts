@@ -2,7 +2,7 @@ import type * as z from 'zod';
 import type { Fault } from '../errors.ts';
 import { nearestName } from '../nearest-name.ts';
 import type { Places } from '../yaml/places.ts';
-import type { PathStep, YamlValue } from '../yaml/value.ts';
+import type { PathStep, YamlMapping, YamlValue } from '../yaml/value.ts';
 import {
   branchFor,
   type Definition,
@@ -40,7 +40,7 @@ export class IssueFaults {
     const path = [...prefix, ...(issue.path as PathStep[])];
     switch (issue.code) {
       case 'unrecognized_keys':
-        return issue.keys.map((key) => this.#unknownKey(path, key));
+        return issue.keys.flatMap((key) => this.#splitText(path, key) ?? this.#unknownKey(path, key));
       case 'invalid_union':
         return this.#union(issue.errors, path);
       case 'invalid_value':
@@ -61,6 +61,42 @@ export class IssueFaults {
     const issues = errors[branch];
     if (issues === undefined || issues.length === 0) return [this.#wrongShape(path)];
     return issues.flatMap((issue) => this.faultsOf(issue, path));
+  }
+
+  /**
+   * A key without a value behind a text, as in `{ note: wraps, I hope }`: the comma has split what was one text.
+   *
+   * @returns one fault for all pieces of a text, at its first; undefined where the key is one that was meant as such
+   */
+  #splitText(path: PathStep[], key: string): Fault[] | undefined {
+    const entries = Object.entries(valueAt(this.#root, path) as YamlMapping);
+    const known = this.#knownKeys(path);
+    const isPiece = ([name, value]: readonly [string, YamlValue]) => value === '' && !known.includes(name);
+    const at = entries.findIndex(([name]) => name === key);
+    const first = entries.findLastIndex((entry, i) => i < at && !isPiece(entry));
+    const [owner, text] = entries[first] ?? [];
+    if (owner === undefined || !isPiece(entries[at]!) || typeof text !== 'string' || text === '')
+      return undefined;
+    if (!this.#isInFlow(path, owner, key) || (!key.includes(' ') && nearestName(key, known)))
+      return undefined;
+    if (at > first + 1) return [];
+    const after = entries.slice(at).findIndex((entry) => !isPiece(entry));
+    const pieces = entries.slice(at, after < 0 ? undefined : at + after).map(([name]) => name);
+    const whole = shorten([text, ...pieces].join(', '));
+    return [
+      {
+        code: 'YAML_UNQUOTED_COMMA',
+        message: `the comma in ${whole} splits it here, inside { }`,
+        ...this.#places.markOf([...path, owner]),
+        hint: `a text with a comma needs quotes there: "${whole}"`,
+      },
+    ];
+  }
+
+  /** Whether two keys stand inside { }: those of an indented mapping stand below one another. */
+  #isInFlow(path: PathStep[], one: string, other: string): boolean {
+    const [a, b] = [one, other].map((key) => this.#places.markOfKey([...path, key]).at);
+    return a?.line === b?.line || a?.column !== b?.column;
   }
 
   #unknownKey(path: PathStep[], key: string): Fault {

@@ -1,6 +1,6 @@
 import { nearestName } from '../nearest-name.ts';
 import type { Dimension } from '../units/dimension.ts';
-import { nearestUnitName } from '../units/parse-unit.ts';
+import { nearestUnitName, otherSpelling } from '../units/parse-unit.ts';
 import type { NameAst } from './ast.ts';
 import { ExpressionError } from './expression-error.ts';
 import { FUNCTION_NAMES } from './vocabulary.ts';
@@ -24,10 +24,16 @@ export function lookupIn(symbols: ReadonlyMap<string, SymbolInfo>): Lookup {
   return Object.assign((name: string) => symbols.get(name), { names: () => symbols.keys() });
 }
 
+/** `kg/m3`: the unit that ends there is meant with a power, whatever names are near. */
+function powerIn(name: string): string | undefined {
+  const other = otherSpelling(name);
+  return other?.includes('^') ? other : undefined;
+}
+
 /** The fault of a name that nothing bears, with the nearest parameter, function or unit. */
 export function unknownName(use: NameAst, lookup: Lookup): ExpressionError {
   const known = [...(lookup.names?.() ?? []), 'pi', ...FUNCTION_NAMES];
-  const near = nearestName(use.name, known) ?? nearestUnitName(use.name);
+  const near = powerIn(use.name) ?? nearestName(use.name, known) ?? nearestUnitName(use.name);
   const hint = near === undefined ? undefined : `did you mean ${near}?`;
   return new ExpressionError('EXPRESSION_UNKNOWN_NAME', `nothing is named "${use.name}"`, use, hint);
 }

@@ -2,7 +2,7 @@ import { InputError } from '../errors.ts';
 import type { FileReader } from './file-reader.ts';
 import type { FileModel } from './model.ts';
 import { type ReadDocument, readFile } from './read-file.ts';
-import type { ProjectSource } from './source.ts';
+import type { ProjectSource, TextInput } from './source.ts';
 import type { Where } from './where.ts';
 
 /** An assembly with all that it includes, each file read once. */
@@ -25,12 +25,10 @@ const INCLUDE_DEPTH = 32;
 export function readProject(readDocument: ReadDocument, path: string, source: ProjectSource): Project {
   const files = new Map<string, FileModel>();
   const open: string[] = [];
-  const read = (file: string): FileModel => {
-    const known = files.get(file);
-    if (known) return known;
+  const read = (file: string, input: TextInput): FileModel => {
     open.push(file);
     const include = (named: string, where: Where, reader: FileReader): FileModel => {
-      const target = resolve(source, file, named, where, reader);
+      const target = atInclude(where, reader, () => source.resolve(file, named));
       const at = open.indexOf(target);
       if (at >= 0 || open.length >= INCLUDE_DEPTH)
         reader.fault(where, {
@@ -42,27 +40,26 @@ export function readProject(readDocument: ReadDocument, path: string, source: Pr
           hint: 'move what both need into a file of its own',
         });
       reader.faults.check();
-      return read(target);
+      const known = files.get(target);
+      if (known) return known;
+      return read(
+        target,
+        atInclude(where, reader, () => source.readText(target)),
+      );
     };
-    const model = readFile(file, source.readText(file), include, readDocument);
+    const model = readFile(file, input, include, readDocument);
     open.pop();
     files.set(file, model);
     return model;
   };
-  const root = read(path);
+  const root = read(path, source.readText(path));
   return { root, files: new Map([[path, root], ...files]), source };
 }
 
 /** The source's own fault, with the place of the `include:` that named the file. */
-function resolve(
-  source: ProjectSource,
-  from: string,
-  named: string,
-  where: Where,
-  reader: FileReader,
-): string {
+function atInclude<T>(where: Where, reader: FileReader, ask: () => T): T {
   try {
-    return source.resolve(from, named);
+    return ask();
   } catch (error) {
     if (!(error instanceof InputError)) throw error;
     for (const { at: _, ...fault } of error.faults) reader.fault(where, fault);

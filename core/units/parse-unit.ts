@@ -92,6 +92,8 @@ const OTHER_SPELLINGS = new Map([
   ['minutes', 'minute'],
   ['h', 'hour'],
   ['hours', 'hour'],
+  ['cc', 'cm^3'],
+  ['ccm', 'cm^3'],
 ]);
 
 /** The fault of a name that is no unit, with the unit that was probably meant. */
@@ -105,9 +107,20 @@ export function unitHint(name: string): string {
   return near === undefined ? `the units are ${UNIT_NAMES.join(' ')}` : `did you mean ${near}?`;
 }
 
+/** The unit that a spelling of people's own stands for: `feet`, and powers without their sign, such as `m3` and `cc`. */
+export function otherSpelling(name: string): string | undefined {
+  const known = OTHER_SPELLINGS.get(name.toLowerCase());
+  if (known !== undefined) return known;
+  const [, base, power] = /^(.*?)([2-9²³⁴⁵])$/u.exec(name) ?? [];
+  const unit = base === undefined ? undefined : findUnit(base) && base;
+  return unit && `${unit}^${SUPERSCRIPTS[power!] ?? power}`;
+}
+
+const SUPERSCRIPTS: Readonly<Record<string, string>> = { '²': '2', '³': '3', '⁴': '4', '⁵': '5' };
+
 /** The unit probably meant: another spelling of it, or the nearest with the same first letter and about as long. */
 export function nearestUnitName(name: string): string | undefined {
-  const other = OTHER_SPELLINGS.get(name.toLowerCase());
+  const other = otherSpelling(name);
   if (other !== undefined) return other;
   const first = name.charAt(0).toLowerCase();
   const difference = (unit: string): number => Math.abs(unit.length - name.length);

@@ -186,6 +186,11 @@ describe('readDocument refuses', () => {
       '5:11 YAML_UNQUOTED_COMMA',
     ],
     [
+      'a text with a comma, unquoted in a mapping',
+      'solid: particle\n    override: { mass: 1, reason: wraps, I hope, well enough }',
+      '5:34 YAML_UNQUOTED_COMMA',
+    ],
+    [
       'an unquoted comma in a mapping',
       'solid: { rod: { length: max(a, min(b, c)) } }',
       '4:29 YAML_UNQUOTED_COMMA',

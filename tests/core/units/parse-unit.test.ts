@@ -65,5 +65,7 @@ describe('parseUnit', () => {
     });
     expect(faultOf('µm').hint).toBe('did you mean um?');
     expect(faultOf('inch').hint).toBe('did you mean in?');
+    expect(faultOf('kg/m3').hint).toBe('did you mean m^3?');
+    expect(faultOf('g*mm²').hint).toBe('did you mean mm^2?');
   });
 });
