@@ -10,7 +10,7 @@ import { ConventionsDiffer } from '#web/components/compare/conventions-differ.ts
 import { LimitsChangeSection } from '#web/components/compare/limits-change.tsx';
 import { ParametersChangeSection } from '#web/components/compare/parameters-change.tsx';
 import { PrincipalChangeSection } from '#web/components/compare/principal-change.tsx';
-import { QuantityName } from '#web/components/compare/quantity-words.tsx';
+import { QuantityName } from '#web/components/compare/quantity-name.tsx';
 import { SidesLine } from '#web/components/compare/sides-line.tsx';
 import { TextsChangeSection } from '#web/components/compare/texts-change.tsx';
 import { withKeys } from '#web/components/history/history-view.ts';

@@ -7,7 +7,7 @@ import { attributionOf } from './attribution-rows.ts';
 import { AttributionTable } from './attribution-table.tsx';
 import { changeRows } from './change-rows.ts';
 import { attributed, type CompareView, chosenQuantity } from './compare-view.ts';
-import { quantityWords } from './quantity-words.tsx';
+import { quantityWords } from './quantity-words.ts';
 
 /** Which part moved one quantity, by how much and by which cause. */
 export function AttributionSection({

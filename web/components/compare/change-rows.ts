@@ -68,8 +68,11 @@ function printedChange(a: string, b: string, decimals: number): string {
 export const signed = (figure: string): string =>
   figure === NO_FIGURE || figure.startsWith('−') || readFigure(figure) === 0 ? figure : `+${figure}`;
 
-const ofAText = (share: number | null): string =>
-  share === null || share === 0 ? '' : `${share > 0 ? '+' : ''}${formatPercent(share)} %`;
+function ofAText(share: number | null): string {
+  if (share === null || share === 0) return '';
+  const text = formatPercent(share);
+  return `${share > 0 && !text.startsWith('under') ? '+' : ''}${text} %`;
+}
 
 /** The rows of the table: mass, centre, tensor about each side's own centre. */
 export const totalsRows = (d: Difference, units: DisplayUnits): ChangeRow[] =>

@@ -1,8 +1,9 @@
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Choices } from '#core/api/runs.ts';
-import { Choice, type Option } from '#web/components/sentence/choice.tsx';
+import { Choice } from '#web/components/sentence/choice.tsx';
 import { Entry } from '#web/components/sentence/entry.tsx';
+import type { Option } from '#web/components/sentence/option.ts';
 import { type HistoryView, isFiltered } from './history-view.ts';
 import { dayText, sinceOptions } from './since-options.ts';
 

@@ -87,8 +87,8 @@ export function RunsTable({
                 <Link to={linkTo.run(project, row.id)} className="code">
                   {runName(row)}
                 </Link>
-                {row.dirty && <span className="soft text-sm"> not as committed</span>}
-                {row.tag && <span className="soft text-sm"> {row.tag}</span>}
+                {row.dirty && <span className="soft block text-sm">not as committed</span>}
+                {row.tag && <span className="soft block text-sm">{row.tag}</span>}
               </th>
               <td role="cell" data-label="assembly, state">
                 <span>
@@ -96,7 +96,11 @@ export function RunsTable({
                 </span>
               </td>
               <td role="cell" data-label="branch">
-                <span className="code break-all">{row.branch ?? '–'}</span>
+                {row.branch === null ? (
+                  <span className="soft text-sm">{row.commit === null ? 'not in git' : 'no branch'}</span>
+                ) : (
+                  <span className="code max-w-44 break-words md:inline-block">{row.branch}</span>
+                )}
               </td>
               <td role="cell" className="n" data-label={`mass ${mass.scale.head}`}>
                 <span>{mass.text(row.mass)}</span>

@@ -1,4 +1,4 @@
-import type { Option } from '#web/components/sentence/choice.tsx';
+import type { Option } from '#web/components/sentence/option.ts';
 
 const DAY = new Intl.DateTimeFormat('en-GB', {
   day: 'numeric',

@@ -10,7 +10,7 @@ export function niceTicks(low: number, high: number, count: number): { values: n
   const rough = (high - low) / Math.max(1, count);
   const power = Math.floor(Math.log10(rough));
   const ten = Number(`1e${power}`);
-  const step = STEPS.find((s) => s * ten >= rough * (1 - 1e-9))! * ten;
+  const step = STEPS.find((s) => s * ten >= rough * 0.8)! * ten;
   const decimals = Math.max(0, -power + (step / ten === 2.5 ? 1 : 0));
   const first = Math.ceil(low / step - 1e-9);
   const last = Math.floor(high / step + 1e-9);

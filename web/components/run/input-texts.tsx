@@ -6,7 +6,7 @@ import type { RollUpRecord } from '#core/record/record.ts';
 import { inputsQuery } from '#web/api/run.ts';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { View } from '#web/components/view.tsx';
-import { readLineAnchor } from './file-place.tsx';
+import { readLineAnchor } from './line-anchor.ts';
 import { NumberedText, type Remark } from './numbered-text.tsx';
 
 /** The text of every input with its line numbers; lines of warnings and of broken limits are marked. */

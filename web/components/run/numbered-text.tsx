@@ -1,6 +1,6 @@
 import { useEffect, useRef } from 'react';
 import { plainText } from '#core/figures/index.ts';
-import { lineAnchor } from './file-place.tsx';
+import { lineAnchor } from './line-anchor.ts';
 
 /** What is said about one line. */
 export interface Remark {

@@ -10,6 +10,7 @@ import type { RollUpRecord } from '#core/record/record.ts';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { WideTable } from '#web/components/wide-table.tsx';
 import type { RunView } from './run-view.ts';
+import { TENSOR_DIGITS } from './tensor.tsx';
 
 const BODY_AXES = ['x', 'y', 'z'] as const;
 
@@ -19,7 +20,10 @@ export function PrincipalSection({ record, view }: { record: RollUpRecord; view:
   if (!principal) return null;
   const { units } = view;
   const scale = scaleFor(units.inertia, principal.moments, TENSOR_ROOM);
-  const moments = printMoments(principal.moments.map((m) => m / scale.factor));
+  const moments = printMoments(
+    principal.moments.map((m) => m / scale.factor),
+    TENSOR_DIGITS,
+  );
   const radii = principal.moments.map((m) => (mass > 0 ? Math.sqrt(Math.max(0, m) / mass) : Number.NaN));
   const length = scaleFor(units.length, radii, PLAIN_ROOM);
   const radiusDecimals = decimalsFor(radii.map((r) => r / length.factor));

@@ -5,6 +5,9 @@ import { Matrix } from '#web/components/matrix.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
 import type { RunView } from './run-view.ts';
 
+/** One more than elsewhere: products are small beside moments. */
+export const TENSOR_DIGITS = 6;
+
 /** The inertia tensor about the chosen point, in body axes. */
 export function TensorSection({ record, view }: { record: RollUpRecord; view: RunView }) {
   const { inertia } = record[view.on];
@@ -37,6 +40,6 @@ export function printRows(
 ): { head: string; rows: string[][]; note: string | null } {
   const six = fromRows(rows);
   const scale = scaleFor(units.inertia, six, TENSOR_ROOM);
-  const printed = printTensor(inUnit(six, scale));
+  const printed = printTensor(inUnit(six, scale), TENSOR_DIGITS);
   return { head: scale.head, rows: tensorRows(printed, products), note: printed.note };
 }

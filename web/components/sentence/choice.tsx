@@ -1,13 +1,6 @@
 import { useId, useLayoutEffect, useState } from 'react';
+import type { Option } from './option.ts';
 import { useListbox } from './use-listbox.ts';
-
-export interface Option<T extends string> {
-  readonly value: T;
-  /** As it reads in the sentence. */
-  readonly label: string;
-  /** What helps to choose, in the open list alone. */
-  readonly hint?: string;
-}
 
 /**
  * A word of a sentence that can be chosen: underlined in brass, opens a list, works by keyboard.

@@ -10,16 +10,3 @@ export function quantityWords(name: string): string {
   if (kind === 'gyration') return `radius of gyration ${which}`;
   return which === '' ? kind : `${kind} ${which}`;
 }
-
-/** At the head of a row in a table that says about which point, the axes lowered. */
-export function QuantityName({ name }: { name: string }) {
-  const [kind = '', which = ''] = name.split('.');
-  if (kind === 'inertia' || kind === 'origin')
-    return (
-      <>
-        I<sub>{which}</sub>
-      </>
-    );
-  const words = quantityWords(name);
-  return words.charAt(0).toUpperCase() + words.slice(1);
-}
