@@ -33,6 +33,27 @@ const table = new Set(
   ),
 );
 
+/** Codes of problems that the server answers with. */
+function codesOfServer(): string[] {
+  const found = new Set(['BODY_NOT_RIGHT', 'QUERY_NOT_RIGHT']);
+  for (const name of readdirSync(join(root, 'server'), { recursive: true, encoding: 'utf8' })) {
+    if (!name.endsWith('.ts')) continue;
+    const text = readFileSync(join(root, 'server', name), 'utf8');
+    const said =
+      /(?:ProblemError\(\s*(?:\d+|[^,()]+\? \d+ : \d+),|conflict\(|badRequest\(|code:)\s*'([A-Z_]+)'/g;
+    for (const [, code] of text.matchAll(said)) found.add(code!);
+  }
+  return [...found].sort();
+}
+
+describe('the table of codes in server/README.md', () => {
+  it('has every code that the server can answer with, and no other', () => {
+    const text = readFileSync(join(root, 'server', 'README.md'), 'utf8');
+    const rows = [...text.matchAll(/^\| `([A-Z_]+)`/gm)].map(([, code]) => code!);
+    expect(rows.sort()).toEqual(codesOfServer());
+  });
+});
+
 describe('the table of codes in DEVELOPERS.md', () => {
   it('has every code that the source can report', () => {
     const missing = [...codesInSource()].filter((code) => !table.has(code) && !CONSTANTS.has(code));

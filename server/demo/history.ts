@@ -1,5 +1,8 @@
 import type { Who } from './people.ts';
 
+/** Who has a token of their own. */
+export type Pusher = Extract<Who, 'noor' | 'tomas'>;
+
 /** One commit of the demo's history: what was replaced in which file, who wrote it, and how many days ago. */
 export interface DemoCommit {
   readonly daysAgo: number;
@@ -11,7 +14,7 @@ export interface DemoCommit {
   readonly branch?: string;
   readonly dirty?: boolean;
   /** By their own token instead of the CI's. */
-  readonly pushedBy?: Who;
+  readonly pushedBy?: Pusher;
   readonly release?: DemoRelease;
   readonly comments?: readonly { readonly by: Who; readonly hours: number; readonly text: string }[];
 }

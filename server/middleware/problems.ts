@@ -91,7 +91,7 @@ function uploadProblem(error: multer.MulterError): ProblemError {
   const large = error.code === 'LIMIT_FILE_SIZE' || error.code === 'LIMIT_FILE_COUNT';
   return new ProblemError(
     large ? 413 : 400,
-    `UPLOAD_${error.code}`,
+    'UPLOAD_LIMIT',
     `expected files within the limits, found: ${error.message}`,
     {
       hint: 'at most 200 files, 64 MB each; push larger ones with the command',
