@@ -5,7 +5,7 @@
  */
 export function Matrix({ rows, label }: { rows: readonly (readonly string[])[]; label: string }) {
   return (
-    <div className="matrix block max-w-full">
+    <div className="matrix block max-w-full max-[420px]:px-2 max-[420px]:text-[13px]">
       <table className="w-auto">
         <caption className="sr-only">{label}</caption>
         <tbody>
@@ -14,7 +14,7 @@ export function Matrix({ rows, label }: { rows: readonly (readonly string[])[]; 
               {row.map((figure, k) => (
                 <td
                   key={AXES[k]}
-                  className={`whitespace-nowrap border-0 py-px pr-0 text-right ${k > 0 ? 'pl-5 max-sm:pl-3' : ''}`}
+                  className={`whitespace-nowrap border-0 py-px pr-0 text-right ${k > 0 ? 'pl-5 max-sm:pl-2' : ''}`}
                 >
                   {figure}
                 </td>

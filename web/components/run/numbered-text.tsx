@@ -51,7 +51,7 @@ export function NumberedText({
               id={lineAnchor({ file: path, line: number })}
               data-line={number}
               tabIndex={-1}
-              className={`border-l-[3px] pr-4 ${said.length > 0 ? 'border-outside' : here ? 'border-brass' : 'border-transparent'} ${here || said.length > 0 ? 'bg-paper-deep' : ''}`}
+              className={`-outline-offset-2 border-l-[3px] pr-4 ${said.length > 0 ? 'border-outside' : here ? 'border-brass' : 'border-transparent'} ${here || said.length > 0 ? 'bg-paper-deep' : ''}`}
             >
               <span className="soft mr-4 inline-block w-12 select-none text-right">{number}</span>
               {plainText(line.replaceAll('\t', '  '))}

@@ -3,6 +3,7 @@ import type { RunDetail } from '#core/api/runs.ts';
 import { formatShort, unitText } from '#core/figures/index.ts';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { Time } from '#web/components/time.tsx';
+import { WideTable } from '#web/components/wide-table.tsx';
 
 /** Where the run came from and what it was computed with. */
 export function ProvenanceSection({ detail: { run, record } }: { detail: RunDetail }) {
@@ -62,27 +63,29 @@ export function ParametersSection({ detail: { record } }: { detail: RunDetail })
       <SectionHead title="Parameters" id="parameters">
         SI
       </SectionHead>
-      <table>
-        <caption className="sr-only">Parameters and their values in SI</caption>
-        <thead className="sr-only">
-          <tr>
-            <th scope="col">parameter</th>
-            <th scope="col">value</th>
-          </tr>
-        </thead>
-        <tbody>
-          {entries.map(([name, { value, unit }]) => (
-            <tr key={name}>
-              <th scope="row" className="break-all">
-                {name}
-              </th>
-              <td className="n">
-                {formatShort(value)} <span className="u">{unitText(unit)}</span>
-              </td>
+      <WideTable label="Parameters">
+        <table>
+          <caption className="sr-only">Parameters and their values in SI</caption>
+          <thead className="sr-only">
+            <tr>
+              <th scope="col">parameter</th>
+              <th scope="col">value</th>
             </tr>
-          ))}
-        </tbody>
-      </table>
+          </thead>
+          <tbody>
+            {entries.map(([name, { value, unit }]) => (
+              <tr key={name}>
+                <th scope="row" className="break-all">
+                  {name}
+                </th>
+                <td className="n">
+                  {formatShort(value)} <span className="u">{unitText(unit)}</span>
+                </td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </WideTable>
     </section>
   );
 }
