@@ -230,7 +230,7 @@ export const COMMITS: readonly DemoCommit[] = [
     top: DRONE,
     branch: 'short-booms',
     pushedBy: 'tomas',
-    edits: [drone('boom: { value: 700 mm', 'boom: { value: 620 mm')],
+    edits: [drone('boom: { value: 700 mm', 'boom: { value: 600 mm')],
     comments: [{ by: 'tomas', hours: 1, text: 'The balance leaves its limit forward; not worth it.' }],
   },
   {
@@ -238,7 +238,7 @@ export const COMMITS: readonly DemoCommit[] = [
     by: 'noor',
     message: 'Wiring counted again, with connectors',
     top: DRONE,
-    edits: [drone('boom: { value: 620 mm', 'boom: { value: 700 mm'), drone('mass: 66 g\n', 'mass: 84 g\n')],
+    edits: [drone('boom: { value: 600 mm', 'boom: { value: 700 mm'), drone('mass: 66 g\n', 'mass: 84 g\n')],
   },
   {
     daysAgo: 43,

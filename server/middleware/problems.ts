@@ -71,20 +71,25 @@ function problemOf(error: unknown): ProblemError {
       hint: 'nothing was done; try again in a moment',
       retryAfter: 2,
     });
+  if (stateOf(error).startsWith('53'))
+    return new ProblemError(503, 'DATABASE_FULL', 'expected room in the database, found none left', {
+      hint: 'nothing was done; the administrator makes room, and what waits is sent again',
+      retryAfter: 30,
+    });
   return new ProblemError(500, 'BUG', 'the server has a fault; the request id stands in its log', {
     hint: 'report it with the request id',
   });
 }
 
 /** PostgreSQL says by class 57P that it stops or starts; the driver says that the line broke. */
-function isShutdown(error: unknown): boolean {
-  const { original, code, message } = error as {
-    original?: { code?: string };
-    code?: string;
-    message?: string;
-  };
-  const state = original?.code ?? code ?? '';
-  return /^57P|^08|ECONN|EPIPE/.test(state) || /Connection terminated/.test(message ?? '');
+const isShutdown = (error: unknown): boolean =>
+  /^57P|^08|ECONN|EPIPE/.test(stateOf(error)) ||
+  /Connection terminated/.test((error as { message?: string }).message ?? '');
+
+/** The SQLSTATE or the system's code of an error; '' where it has none. */
+function stateOf(error: unknown): string {
+  const { original, code } = error as { original?: { code?: string }; code?: string };
+  return original?.code ?? code ?? '';
 }
 
 function uploadProblem(error: multer.MulterError): ProblemError {

@@ -22,6 +22,8 @@ export interface ClusterOptions {
   readonly folder: string;
   /** False for tests: faster, and worth nothing after a power cut. */
   readonly durable: boolean;
+  /** A free one where left out. */
+  readonly port?: number;
   readonly tell: (line: string) => void;
 }
 
@@ -31,7 +33,12 @@ export interface ClusterOptions {
  *
  * @throws PostgresError with what to do
  */
-export async function startCluster({ folder, durable, tell }: ClusterOptions): Promise<Cluster> {
+export async function startCluster({
+  folder,
+  durable,
+  tell,
+  port: wanted,
+}: ClusterOptions): Promise<Cluster> {
   const data = join(folder, 'data');
   const version = existsSync(join(data, 'PG_VERSION'))
     ? readFileSync(join(data, 'PG_VERSION'), 'utf8').trim()
@@ -45,7 +52,7 @@ export async function startCluster({ folder, durable, tell }: ClusterOptions): P
   const running = await portOfRunning(data, password);
   if (running) return { url: await database(running, password), found: true, stop: async () => {} };
 
-  const port = await freePort();
+  const port = wanted ?? (await freePort());
   const settings = [
     `-p ${port}`,
     '-c listen_addresses=127.0.0.1',
@@ -107,7 +114,11 @@ async function makeCluster(
     'UTF8',
     '--locale=C.UTF-8',
     ...(durable ? [] : ['--no-sync']),
-  ]);
+  ]).catch((error: { stderr?: string; message: string }) => {
+    throw new PostgresError(
+      `PostgreSQL could not make a database in ${folder}: ${(error.stderr || error.message).trim()}\nThe account ${isRoot() ? 'postgres' : 'that starts it'} must be able to reach and write the folder.`,
+    );
+  });
   renameSync(making, data);
 }
 
