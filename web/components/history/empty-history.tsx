@@ -13,7 +13,7 @@ export function EmptyHistory({ project, mayPush }: { project: string; mayPush: b
         installed:
       </p>
       <pre className="my-4 whitespace-pre-wrap break-words border-l-[3px] border-ink py-1 pl-4 leading-relaxed">
-        <code>{`steelyard sign-in ${server} --project ${project}\nsteelyard run assembly.yaml --push`}</code>
+        <code>{`steelyard sign-in --server ${server} --project ${project}\nsteelyard run assembly.yaml --push --project ${project}`}</code>
       </pre>
       <p className="max-w-[72ch]">In a pipeline, with a token of this project in its secrets:</p>
       <pre className="my-4 whitespace-pre-wrap break-words border-l-[3px] border-ink py-1 pl-4 leading-relaxed">

@@ -1,11 +1,6 @@
-import { Link } from 'react-router-dom';
 import type { RunRow } from '#core/api/runs.ts';
-import { ReleasedMark } from '#web/components/released-mark.tsx';
-import { Time } from '#web/components/time.tsx';
-import { VerdictMark } from '#web/components/verdict-mark.tsx';
-import { linkTo } from '#web/paths.ts';
 import type { Sort } from './history-view.ts';
-import { runName } from './run-name.ts';
+import { RunLine } from './run-line.tsx';
 import { columnsOf, type FigureColumn, unitsOfRows } from './runs-units.ts';
 import { SortHead } from './sort-head.tsx';
 
@@ -29,7 +24,8 @@ export function RunsTable({
   onChoose: (row: RunRow) => void;
 }) {
   const { units, mixed } = unitsOfRows(rows);
-  const { mass, centre, moments } = columnsOf(rows, units);
+  const columns = columnsOf(rows, units);
+  const { mass, centre, moments } = columns;
   const on = new Set(rows.map((r) => r.on));
   return (
     <>
@@ -69,61 +65,14 @@ export function RunsTable({
         </thead>
         <tbody role="rowgroup">
           {rows.map((row) => (
-            <tr key={row.id} role="row" className="relative">
-              <td
-                role="cell"
-                data-label=""
-                className="max-[720px]:absolute max-[720px]:right-0 max-[720px]:top-2.5"
-              >
-                <input
-                  type="checkbox"
-                  aria-label={`choose ${runName(row)}, ${row.assembly}, ${row.state}`}
-                  checked={chosen.some((c) => c.id === row.id)}
-                  onChange={() => onChoose(row)}
-                />
-              </td>
-              <th role="rowheader" scope="row" className="whitespace-nowrap">
-                <ReleaseState row={row} />
-                <Link to={linkTo.run(project, row.id)} className="code">
-                  {runName(row)}
-                </Link>
-                {row.dirty && <span className="soft block text-sm">not as committed</span>}
-                {row.tag && <span className="soft block text-sm">{row.tag}</span>}
-              </th>
-              <td role="cell" data-label="assembly, state">
-                <span>
-                  {row.assembly}, {row.state}
-                </span>
-              </td>
-              <td role="cell" data-label="branch">
-                {row.branch === null ? (
-                  <span className="soft text-sm">{row.commit === null ? 'not in git' : 'no branch'}</span>
-                ) : (
-                  <span className="code max-w-44 break-words md:inline-block">{row.branch}</span>
-                )}
-              </td>
-              <td role="cell" className="n" data-label={`mass ${mass.scale.head}`}>
-                <span>{mass.text(row.mass)}</span>
-              </td>
-              <td role="cell" className="n" data-label={`centre x ${centre.scale.head}`}>
-                <span>{centre.text(row.centre?.[0])}</span>
-              </td>
-              <td role="cell" className="n" data-label={`moments ${moments.scale.head}`}>
-                <span>{row.moments ? <Moments texts={row.moments.map(moments.text)} /> : '—'}</span>
-              </td>
-              <td role="cell" data-label="verdict">
-                <span>
-                  <VerdictMark verdict={row.verdict} />
-                  <Recomputed row={row} />
-                </span>
-              </td>
-              <td role="cell" data-label="pushed by">
-                <span className="md:whitespace-nowrap">{row.pushedBy}</span>
-              </td>
-              <td role="cell" data-label="when">
-                <Time at={row.at} />
-              </td>
-            </tr>
+            <RunLine
+              key={row.id}
+              project={project}
+              row={row}
+              columns={columns}
+              chosen={chosen.some((c) => c.id === row.id)}
+              onChoose={() => onChoose(row)}
+            />
           ))}
         </tbody>
       </table>
@@ -153,34 +102,3 @@ const UnitHead = ({ name, column }: { name: string; column: FigureColumn }) => (
     {name} <i>{column.scale.head}</i>
   </th>
 );
-
-const Moments = ({ texts }: { texts: readonly string[] }) =>
-  texts.map((text, i) => (
-    // biome-ignore lint/suspicious/noArrayIndexKey: in the order of size
-    <span key={i}>
-      {i > 0 && <span className="soft px-[0.35em] font-text">·</span>}
-      {text}
-    </span>
-  ));
-
-const ReleaseState = ({ row }: { row: RunRow }) => {
-  if (row.release === 'released') return <ReleasedMark />;
-  if (row.release === 'withdrawn') return <ReleasedMark withdrawn />;
-  return null;
-};
-
-/** Said only where it is not the usual: that the server came to the same bits. */
-function Recomputed({ row: { recomputation, release } }: { row: RunRow }) {
-  const said = [
-    recomputation.status === 'recomputed'
-      ? ''
-      : recomputation.status === 'waiting'
-        ? 'being recomputed'
-        : recomputation.status,
-    release === 'asked' ? 'release asked for' : '',
-  ].filter(Boolean);
-  const bad = recomputation.status === 'differs';
-  return said.length === 0 ? null : (
-    <span className={`block text-sm ${bad ? 'text-outside' : 'text-ink-soft'}`}>{said.join(' · ')}</span>
-  );
-}

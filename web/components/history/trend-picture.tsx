@@ -1,10 +1,12 @@
 import { type KeyboardEvent, type PointerEvent, useRef, useState } from 'react';
-import { Link, useNavigate } from 'react-router-dom';
+import { useNavigate } from 'react-router-dom';
 import type { Trend } from '#core/api/runs.ts';
 import { useWidth } from '#web/components/use-width.ts';
 import { formatTime } from '#web/lib/format-time.ts';
 import { linkTo } from '#web/paths.ts';
-import { layOutTrend, nearestPoint, type PlacedPoint, type TrendLayout } from './trend-layout.ts';
+import { Axes, Stops } from './trend-axes.tsx';
+import { layOutTrend, nearestPoint, type PlacedPoint } from './trend-layout.ts';
+import { PointLink, VERDICT_WORDS } from './trend-point.tsx';
 
 const NARROW = 560;
 /** With more points than this, only those that say something are drawn over the line. */
@@ -93,89 +95,6 @@ export function TrendPicture({ trend, project, title }: { trend: Trend; project:
     </div>
   );
 }
-
-const Axes = ({ at }: { at: TrendLayout }) => (
-  // biome-ignore lint/a11y/noAriaHiddenOnFocusable: nothing in it takes the focus
-  <g aria-hidden="true">
-    {at.ticks.map(({ y, text }) => (
-      <g key={text}>
-        <path d={`M${at.left} ${y}H${at.right}`} className="stroke-rule" />
-        <text x={at.left - 9} y={y + 4} textAnchor="end" className="fig soft">
-          {text}
-        </text>
-      </g>
-    ))}
-    <path d={`M${at.left} ${at.bottom}H${at.right}`} className="stroke-edge" />
-    {at.times.map(({ x, text }) => (
-      <g key={`${x}`}>
-        <path d={`M${x} ${at.bottom}v5`} className="stroke-edge" />
-        <text x={x} y={at.bottom + 20} className="soft">
-          {text}
-        </text>
-      </g>
-    ))}
-  </g>
-);
-
-const Stops = ({ at }: { at: TrendLayout }) => (
-  <g>
-    {at.stops.map(({ y, text, name, textY }) => (
-      <g key={`${name} ${text}`}>
-        <path d={`M${at.left} ${y}H${at.right}`} className="stroke-ink" strokeWidth="1.5" />
-        <text x={at.right + 8} y={textY + 4} className="fig">
-          {text}
-        </text>
-        <text x={at.left + 8} y={y - 5} className="soft">
-          {name}
-        </text>
-      </g>
-    ))}
-  </g>
-);
-
-function PointLink({
-  placed,
-  index,
-  project,
-  head,
-  current,
-  shown,
-  dot,
-  onFocus,
-}: {
-  placed: PlacedPoint;
-  index: number;
-  project: string;
-  head: string;
-  current: boolean;
-  shown: boolean;
-  dot: boolean;
-  onFocus: () => void;
-}) {
-  const { x, y, text, point } = placed;
-  const outside = point.verdict === 'outside';
-  return (
-    <Link
-      to={linkTo.run(project, point.run)}
-      data-point={index}
-      tabIndex={current ? 0 : -1}
-      aria-label={`${point.label}, ${formatTime(point.at)}, ${text} ${head}, ${VERDICT_WORDS[point.verdict]}${point.released ? ', released' : ''}`}
-      onFocus={onFocus}
-    >
-      {point.released && <path d={`M${x} ${y + 7}l-7 12h14z`} className="fill-brass" />}
-      {outside ? (
-        <path d={`M${x - 5} ${y - 5}l10 10m0-10l-10 10`} className="stroke-outside" strokeWidth="2" />
-      ) : dot || point.released || shown ? (
-        <circle cx={x} cy={y} r="3.2" className="fill-paper stroke-ink" strokeWidth="1.4" />
-      ) : (
-        <circle cx={x} cy={y} r="1.4" className="fill-ink" />
-      )}
-      {shown && <circle cx={x} cy={y} r="8" className="fill-none stroke-brass" strokeWidth="2" />}
-    </Link>
-  );
-}
-
-const VERDICT_WORDS = { within: 'within', outside: 'outside a limit', unlimited: 'no limits' } as const;
 
 const Said = ({ placed: { point, text }, head }: { placed: PlacedPoint; head: string }) => (
   <>

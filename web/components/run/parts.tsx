@@ -1,4 +1,4 @@
-import { type ReactNode, useState } from 'react';
+import { useState } from 'react';
 import { decimalsFor, formatPercent, PLAIN_ROOM, scaleFor } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { Button } from '#web/components/button.tsx';
@@ -16,6 +16,7 @@ import {
   sortTree,
 } from './parts-tree.ts';
 import type { RunView } from './run-view.ts';
+import { SortableHead } from './sortable-head.tsx';
 
 const shareHead = (key: Share) =>
   key === 'mass' ? (
@@ -140,37 +141,5 @@ export function PartsSection({
         </p>
       ))}
     </section>
-  );
-}
-
-function SortableHead({
-  name,
-  value,
-  sort,
-  onSort,
-  numeric = false,
-}: {
-  name: ReactNode;
-  value: PartsSort;
-  sort: PartsSort;
-  onSort: (sort: PartsSort) => void;
-  numeric?: boolean;
-}) {
-  const here = sort === value;
-  const order = value === 'file' ? 'ascending' : 'descending';
-  return (
-    <th scope="col" aria-sort={here ? order : 'none'} className={numeric ? 'n' : undefined}>
-      <button
-        type="button"
-        className="word"
-        title={value === 'file' ? 'in the order of the file' : 'largest share first'}
-        onClick={() => onSort(value)}
-      >
-        {name}
-        <span aria-hidden="true" className="ml-1 inline-block w-2 text-brass">
-          {here ? (order === 'descending' ? '↓' : '↑') : ''}
-        </span>
-      </button>
-    </th>
   );
 }
