@@ -23,12 +23,19 @@ export const processIo = (): Io => ({
   columns: process.stdout.columns,
 });
 
-/** A pipe that its reader closes (`… | head`) ends the command quietly. */
-export function endQuietlyOnClosedPipe(): void {
+/**
+ * A pipe that its reader closes (`… | head`) ends the command quietly; a stream that cannot be written for another reason
+ * (a full disk) ends it with what is wrong.
+ */
+export function endOnFailedStream(): void {
   for (const stream of [process.stdout, process.stderr])
     stream.on('error', (error: NodeJS.ErrnoException) => {
-      if (error.code !== 'EPIPE') throw error;
-      process.exit(process.exitCode ?? EXIT.fine);
+      if (error.code === 'EPIPE') process.exit(process.exitCode ?? EXIT.fine);
+      if (stream === process.stdout)
+        process.stderr.write(
+          `error FILE_NOT_WRITTEN: expected to write to standard output, found that ${whyNotWritten(error)}\nhint: send it to another place, or mend that\n`,
+        );
+      process.exit(EXIT.wrong);
     });
 }
 

@@ -13,15 +13,9 @@ import { addSolids } from './commands/solids.ts';
 import { addTray } from './commands/tray.ts';
 import { addWhy } from './commands/why.ts';
 import { EXIT, type ExitStatus } from './exit-status.ts';
-import { endQuietlyOnClosedPipe, type Io, processIo } from './io.ts';
+import type { Io } from './io.ts';
 import { printFaults } from './output/error-printer.ts';
 import { version } from './version.ts';
-
-/** The command of the process: its own streams, closed pipes included. */
-export function start(argv: readonly string[]): Promise<ExitStatus> {
-  endQuietlyOnClosedPipe();
-  return run(argv, processIo());
-}
 
 /** Runs one command line and gives its exit status; nothing is thrown. */
 export async function run(argv: readonly string[], io: Io): Promise<ExitStatus> {

@@ -1,5 +1,7 @@
 import type { SolidKey, SolidKind } from '#core/solids/dimensions.ts';
 import { SOLIDS } from '#core/solids/registry.ts';
+import { toAscii } from '../output/glyphs.ts';
+import { wrap } from '../output/text-width.ts';
 import type { Context } from './context.ts';
 
 /** A mesh is a solid of the format but not of the registry: it needs a file. */
@@ -24,8 +26,15 @@ export function describeSolids(name: string | undefined, format: 'table' | 'json
   const all = [...SOLIDS.map(describe), describeMesh()];
   const chosen = name === undefined ? all : all.filter((s) => s.name === name);
   if (format === 'json') return `${JSON.stringify(chosen, null, 2)}\n`;
-  return name === undefined ? listText(all, context) : chosen.map(detailText).join('\n');
+  const columns = Math.max(40, Math.min(context.io.columns ?? 80, 100));
+  const said =
+    name === undefined ? listText(all, columns) : chosen.map((s) => detailText(s, columns)).join('\n');
+  return context.unicode ? said : toAscii(said);
 }
+
+/** A text behind a label, in lines no wider than `columns`; the later ones stand below its start. */
+const hung = (label: string, text: string, columns: number): string[] =>
+  wrap(text, columns - label.length).map((line, i) => (i === 0 ? label : ' '.repeat(label.length)) + line);
 
 interface Described {
   readonly name: string;
@@ -67,34 +76,39 @@ const describeMesh = (): Described => ({
   })),
 });
 
-function listText(all: readonly Described[], context: Context): string {
-  const bar = context.unicode ? '│' : '|';
+function listText(all: readonly Described[], columns: number): string {
   const width = Math.max(...all.map((s) => s.name.length));
-  const lines = all.map((s) => {
+  const lines = all.flatMap((s) => {
     const keys = s.keys.map((k) => (k.required ? k.name : `[${k.name}]`)).join(' ') || '(none)';
-    return `  ${s.name.padEnd(width)}  ${keys}\n  ${' '.repeat(width)}  origin: ${s.origin}`;
+    return [
+      ...hung(`  ${s.name.padEnd(width)}  `, keys, columns),
+      ...hung(`  ${' '.repeat(width)}  origin: `, s.origin, columns),
+    ];
   });
-  return `Solids. Local axes x, y, z; the axis of anything round is z; lengths are full sizes.
-Each diameter, bore and section has a twin in radius. [optional] in brackets.
-${bar}
-${lines.join('\n')}
-${bar}
-steelyard solids NAME says what each key means.
-`.replaceAll(`${bar}\n`, '\n');
+  const paragraphs = [wrap(HEAD, columns), lines, [MORE]];
+  return `${paragraphs.map((paragraph) => paragraph.join('\n')).join('\n\n')}\n`;
 }
 
-function detailText(s: Described): string {
+const HEAD =
+  'Solids. Local axes x, y, z; the axis of anything round is z; lengths are full sizes. Each diameter, bore and section has a twin in radius. [optional] in brackets.';
+const MORE = 'steelyard solids NAME says what each key means.';
+
+function detailText(s: Described, columns: number): string {
   const width = Math.max(4, ...s.keys.map((k) => k.name.length));
-  const keys = s.keys.map((k) => {
+  const keys = s.keys.flatMap((k) => {
     const or = k.or.length > 0 ? ` (or ${k.or.join(', ')})` : '';
-    return `  ${k.name.padEnd(width)}  ${k.about}${or}${k.required ? '' : '; may be left out'}`;
+    const about = `${k.about}${or}${k.required ? '' : '; may be left out'}`;
+    return hung(`  ${k.name.padEnd(width)}  `, about, columns);
   });
   const inside = s.keys.filter((k) => k.required).map((k) => `${k.name}: …`);
   const example = s.keys.length === 0 ? `solid: ${s.name}` : `solid: { ${s.name}: { ${inside.join(', ')} } }`;
-  return `${s.name}: ${s.about}
-  origin: ${s.origin}
-  takes:  ${s.mass}
+  const head = [
+    ...hung(`${s.name}: `, s.about, columns),
+    ...hung('  origin: ', s.origin, columns),
+    ...hung('  takes:  ', s.mass, columns),
+  ];
+  return `${head.join('\n')}
 
-${keys.length > 0 ? `${keys.join('\n')}\n\n` : ''}  ${example}
+${keys.length > 0 ? `${keys.join('\n')}\n\n` : ''}${hung('  ', example, columns).join('\n')}
 `;
 }

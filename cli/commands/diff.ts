@@ -32,7 +32,7 @@ export function addDiff(program: Command, context: Context): void {
     .addOption(
       new Option(
         '--fail-over <quantity=amount>',
-        'exit status 1 where a change is larger, such as mass=5g; may be repeated',
+        'exit status 1 where a change is larger, such as mass=5g or mass=2%; may be repeated',
       )
         .argParser(gatherAmount)
         .default({}, 'none'),

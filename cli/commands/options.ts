@@ -1,5 +1,8 @@
 import { type Command, InvalidArgumentError, Option } from 'commander';
+import { isDay } from '#core/document/is-day.ts';
 import { InputError } from '#core/errors.ts';
+import { displayUnits } from '#core/figures/index.ts';
+import { TextError } from '#core/units/index.ts';
 
 /** Options that several commands share, declared once. */
 
@@ -87,12 +90,47 @@ export function dayOf(given: string | undefined): string {
     const two = (n: number) => String(n).padStart(2, '0');
     return `${now.getFullYear()}-${two(now.getMonth() + 1)}-${two(now.getDate())}`;
   }
-  if (/^\d{4}-\d{2}-\d{2}$/.test(given) && !Number.isNaN(Date.parse(given))) return given;
+  if (isDay(given)) return given;
   throw new InputError([
     {
       code: 'CALL_DAY',
-      message: `expected a day as YYYY-MM-DD, found '${given}'`,
+      message: `expected a day of the calendar as YYYY-MM-DD, found '${given}'`,
       hint: 'for instance --as-of 2027-03-31',
     },
   ]);
+}
+
+/** `--parts`: all, or how many. */
+export function partsOf(text: string): 'all' | number {
+  if (text === 'all') return 'all';
+  if (/^\d+$/.test(text)) return Number(text);
+  throw new InputError([
+    {
+      code: 'CALL_PARTS',
+      message: `expected all or a number of parts, found '${text}'`,
+      hint: 'for instance --parts all',
+    },
+  ]);
+}
+
+const SI_NAMES = { length: 'm', mass: 'kg', angle: 'rad', density: 'kg/m^3', inertia: 'kg*m^2' };
+
+/**
+ * `--units`, before there is anything to show in them.
+ *
+ * @throws InputError UNITS_…, of a unit that is not known or not shown
+ */
+export function checkUnits(units: string | undefined): void {
+  try {
+    displayUnits({ conventions: { fileUnits: SI_NAMES } }, units);
+  } catch (error) {
+    if (!(error instanceof TextError)) throw error;
+    throw new InputError([
+      {
+        code: error.code,
+        message: `--units ${units}: ${error.message}`,
+        ...(error.hint ? { hint: error.hint } : {}),
+      },
+    ]);
+  }
 }

@@ -1,13 +1,13 @@
-import { InputError } from '#core/errors.ts';
-import { displayUnits } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { formatCsv } from '#core/record/record-csv.ts';
 import type { PartSelection } from '#core/record/select-part.ts';
 import { formatJson, formatNdjson } from '../output/formats/json.ts';
 import { formatJunit } from '../output/formats/junit.ts';
 import { formatMarkdown } from '../output/formats/markdown.ts';
-import { type About, renderRun } from '../output/run-report.ts';
+import { renderRun } from '../output/run-report.ts';
+import { aboutIn, aboutOf } from './about.ts';
 import type { Context } from './context.ts';
+import { partsOf } from './options.ts';
 import type { RunOptions } from './run-options.ts';
 
 export interface RenderRequest {
@@ -32,9 +32,9 @@ export function renderRecords(format: string, request: RenderRequest, context: C
     case 'ndjson':
       return formatNdjson(selections ?? records);
     case 'csv':
-      return formatCsv(records);
+      return formatCsv(records, selections);
     case 'markdown':
-      return formatMarkdown(records, { today, products: options.products, ...units });
+      return formatMarkdown(records, { today, products: options.products, ...units }, selections);
     case 'junit':
       return formatJunit(records, { today, ...units });
     default:
@@ -45,7 +45,7 @@ export function renderRecords(format: string, request: RenderRequest, context: C
             colour: context?.colour ?? false,
             unicode: context?.unicode ?? true,
             products: options.products,
-            about: aboutOf(options.about, record),
+            about: aboutIn(aboutOf(options.about), record),
             parts: partsOf(options.parts),
             today,
             ...units,
@@ -55,40 +55,4 @@ export function renderRecords(format: string, request: RenderRequest, context: C
         )
         .join('\n');
   }
-}
-
-function partsOf(text: string): 'all' | number {
-  if (text === 'all') return 'all';
-  const count = Number(text);
-  if (Number.isInteger(count) && count >= 0) return count;
-  throw new InputError([
-    {
-      code: 'CALL_PARTS',
-      message: `expected all or a number of parts, found '${text}'`,
-      hint: 'for instance --parts all',
-    },
-  ]);
-}
-
-/** `centre`, `origin`, `both`, or a point in body axes in the unit of length that is shown. */
-function aboutOf(text: string, record: RollUpRecord): About {
-  if (text === 'both' || text === 'centre' || text === 'origin') return text;
-  const items = text.split(',').map((x) => Number(x.trim()));
-  if (items.length === 3 && items.every(Number.isFinite) && text.split(',').every((x) => x.trim() !== '')) {
-    const unit = displayUnits(record).length;
-    return {
-      name: `[${text
-        .split(',')
-        .map((x) => x.trim())
-        .join(', ')}] ${unit.text}`,
-      point: [items[0]! * unit.factor, items[1]! * unit.factor, items[2]! * unit.factor],
-    };
-  }
-  throw new InputError([
-    {
-      code: 'CALL_ABOUT',
-      message: `expected centre, origin or a point x,y,z, found '${text}'`,
-      hint: "a point is in the file's unit of length, for instance --about 120,0,-30",
-    },
-  ]);
 }

@@ -1,16 +1,16 @@
 import { FAULTS_AT_MOST, type Fault, InputError } from '#core/errors.ts';
-import { displayUnits, plainText } from '#core/figures/index.ts';
+import { plainText } from '#core/figures/index.ts';
 import type { RollUpRecord } from '#core/record/record.ts';
 import { type PartSelection, selectPart } from '#core/record/select-part.ts';
 import { isBroken } from '#core/record/waiver-state.ts';
-import { TextError } from '#core/units/index.ts';
 import { EXIT } from '../exit-status.ts';
 import { writeWhole } from '../io.ts';
 import { annotationsOfFaults, annotationsOfRecords, formatAnnotations } from '../output/ci-annotations.ts';
 import { ciState } from '../project/ci.ts';
 import type { Settings } from '../push/settings.ts';
+import { aboutOf } from './about.ts';
 import type { Context } from './context.ts';
-import { dayOf, formatOfFile } from './options.ts';
+import { checkUnits, dayOf, formatOfFile, partsOf } from './options.ts';
 import { renderRecords } from './render-records.ts';
 import { type FileRun, rollUpFile } from './roll-up-file.ts';
 import { RUN_FORMATS, type RunOptions } from './run-options.ts';
@@ -25,20 +25,19 @@ export async function runFiles(
   const today = dayOf(options.asOf);
   // What is wrong with the call is said before anything is computed.
   const outputs = options.out.map((file) => ({ file, format: formatOfFile(file, options, RUN_FORMATS) }));
+  const format = options.format ?? (context.io.outIsTerminal ? 'table' : 'json');
+  checkCall(options, outputs.length > 0 ? outputs.map((output) => output.format) : [format]);
   const settings = await pushSettings(options, context);
   const runs = await rollUpAll(files, options, context);
   if (!runs) return;
   const records = runs.flatMap((run) => run.records);
-  for (const record of records) checkSelection(record, options);
+  for (const record of records) checkFrame(record, options);
   const selections = options.of === undefined ? null : selectIn(runs, options.of);
   const request = { records, selections, options, today };
   for (const { file, format } of outputs) writeWhole(file, renderRecords(format, request, null));
-  if (outputs.length === 0) {
-    const format = options.format ?? (context.io.outIsTerminal ? 'table' : 'json');
-    context.io.out(renderRecords(format, request, context));
-  }
+  if (outputs.length === 0) context.io.out(renderRecords(format, request, context));
   if (options.threeView) await drawThreeViews(runs, options.threeView, context);
-  reportWarnings(records, outputs.length > 0 || !showsWarnings(options, context), context);
+  reportWarnings(records, outputs.length > 0 || !SHOW_WARNINGS.has(format), context);
   const broken = records.some((record) => record.limits.some((limit) => isBroken(limit, today)));
   if (command === 'check') {
     annotate(annotationsOfRecords(records, today, options.units), context);
@@ -100,38 +99,38 @@ async function rollUpAll(
   return null;
 }
 
-/** A frame or a unit that does not exist is the call's fault, not a bug. */
-function checkSelection(record: RollUpRecord, options: RunOptions): void {
-  if (options.frame !== undefined && !Object.hasOwn(record.frames, options.frame))
-    throw new InputError([
-      {
-        code: 'CALL_FRAME',
-        message: `expected a frame of ${record.assembly}, found '${options.frame}'`,
-        hint: `known: ${Object.keys(record.frames).join(', ') || 'none; declare it under `frames:`'}`,
-      },
-    ]);
-  try {
-    displayUnits(record, options.units);
-  } catch (error) {
-    if (!(error instanceof TextError)) throw error;
-    throw new InputError([
-      {
-        code: error.code,
-        message: `--units ${options.units}: ${error.message}`,
-        ...(error.hint ? { hint: error.hint } : {}),
-      },
-    ]);
-  }
+/** What is wrong with the options, whatever the format that is asked for shows of them. */
+function checkCall(options: RunOptions, formats: readonly string[]): void {
+  aboutOf(options.about);
+  partsOf(options.parts);
+  checkUnits(options.units);
+  if (options.of === undefined || !formats.includes('junit')) return;
+  throw new InputError([
+    {
+      code: 'CALL_OF',
+      message: 'expected a format that shows one part, found junit, which reports the limits of a whole run',
+      hint: 'leave --of out, or ask for table, json, ndjson, csv or markdown',
+    },
+  ]);
+}
+
+/** A frame that does not exist is the call's fault, not a bug. */
+function checkFrame(record: RollUpRecord, { frame }: RunOptions): void {
+  if (frame === undefined || Object.hasOwn(record.frames, frame)) return;
+  throw new InputError([
+    {
+      code: 'CALL_FRAME',
+      message: `expected a frame of ${record.assembly}, found '${frame}'`,
+      hint: `known: ${Object.keys(record.frames).join(', ') || 'none; declare it under `frames:`'}`,
+    },
+  ]);
 }
 
 function selectIn(runs: readonly FileRun[], path: string): PartSelection[] {
   return runs.flatMap((run) => run.rolls.map((roll, i) => selectPart(roll, run.records[i]!, path)));
 }
 
-const showsWarnings = (options: RunOptions, context: Context): boolean => {
-  const format = options.format ?? (context.io.outIsTerminal ? 'table' : 'json');
-  return format === 'table' || format === 'markdown';
-};
+const SHOW_WARNINGS: ReadonlySet<string> = new Set(['table', 'markdown']);
 
 /** Warnings stand in a table; elsewhere they are said on stderr. */
 function reportWarnings(records: readonly RollUpRecord[], aloud: boolean, context: Context): void {

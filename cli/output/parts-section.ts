@@ -13,7 +13,7 @@ export function writeParts(context: ReportContext, parts: 'heaviest' | 'all' | n
   const others = record.parts.filter((p) => !shown.includes(p));
   const part =
     others.length === 0 ? `all ${shown.length}` : `the heaviest ${shown.length} of ${record.parts.length}`;
-  sheet.head('Parts', `share of the predicted total · ${part}`);
+  sheet.head('Parts', `share of the ${on} total · ${part}`);
   const masses = shown.map((p) => p[on].mass);
   const total = record[on].mass;
   const rest = others.map((p) => p[on].mass);

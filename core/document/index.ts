@@ -1,7 +1,7 @@
 export type { Mark, Places } from '../yaml/places.ts';
 export type { PathStep } from '../yaml/value.ts';
+export { isDay } from './is-day.ts';
 export { assemblyJsonSchema } from './json-schema.ts';
-export { isDay } from './judge-limits.ts';
 export { type DocumentRead, readDocument } from './read-document.ts';
 export type {
   AssemblyDocument,

@@ -1,4 +1,5 @@
 import type { YamlMapping, YamlValue } from '../yaml/value.ts';
+import { isDay } from './is-day.ts';
 import { blameValue, isMapping, itemsOf, type Judge } from './judge.ts';
 import { judgeNamesDiffer } from './judge-name.ts';
 import { shorten } from './words.ts';
@@ -15,11 +16,4 @@ function judgeLimit(judge: Judge, limit: YamlMapping): void {
   if (!isMapping(waiver) || typeof waiver.until !== 'string' || isDay(waiver.until)) return;
   const message = `'until' is '${shorten(waiver.until)}'; expected a day of the calendar as YYYY-MM-DD`;
   blameValue(judge, { code: 'MODEL_BAD_DATE', message, hint: 'such as 2031-03-31' }, waiver, 'until');
-}
-
-/** Whether text is a day of the calendar as YYYY-MM-DD. */
-export function isDay(text: string): boolean {
-  if (!/^\d{4}-\d{2}-\d{2}$/.test(text)) return false;
-  const day = new Date(`${text}T00:00:00Z`);
-  return !Number.isNaN(day.getTime()) && day.toISOString().startsWith(text);
 }

@@ -41,7 +41,10 @@ const KINDS: ReadonlyMap<Dimension, DisplayKind> = new Map([
  *   inertia follows mass and length unless it is named too (`mm,g,kg*m^2`)
  * @throws TextError UNITS_UNKNOWN_NAME, UNITS_SYNTAX, or UNITS_NOT_SHOWN for a kind that is not shown or named twice
  */
-export function displayUnits(record: Pick<RollUpRecord, 'conventions'>, override = 'file'): DisplayUnits {
+export function displayUnits(
+  record: { conventions: Pick<RollUpRecord['conventions'], 'fileUnits'> },
+  override = 'file',
+): DisplayUnits {
   const file = record.conventions.fileUnits;
   const wanted = override.trim();
   if (wanted === 'file' || wanted === '') return { ...fromNames(file), own: true };

@@ -1,5 +1,6 @@
 import { csvCell as cell } from './csv-cell.ts';
 import type { BodyRecord, GroupTotals, LimitResult, PartRecord, RollUpRecord, Rows3 } from './record.ts';
+import type { PartSelection } from './select-part.ts';
 
 /** The columns, in an order that only ever grows at its end. SI units in the heads; figures to the last bit. */
 export const CSV_COLUMNS = [
@@ -50,21 +51,35 @@ type Row = Partial<Record<(typeof CSV_COLUMNS)[number], string | number | boolea
 /**
  * Rows of kind total, frame, category, basis, part and limit under one set of columns, so that a sheet can filter. The
  * conventions stand in every row (`units`, `products`, `about`, `axes`), where no tool can lose them.
+ *
+ * @param selections one part or group of each record, in place of all those rows: its own rows, of kind part
  */
-export function formatCsv(records: readonly RollUpRecord[]): string {
-  const rows = records.flatMap(rowsOf);
+export function formatCsv(
+  records: readonly RollUpRecord[],
+  selections: readonly PartSelection[] | null = null,
+): string {
+  const rows = records.flatMap((record, i) =>
+    selections ? selectionRows(record, selections[i]!) : rowsOf(record),
+  );
   const lines = [CSV_COLUMNS.join(','), ...rows.map((row) => CSV_COLUMNS.map((c) => cell(row[c])).join(','))];
   return lines.map((line) => `${line}\n`).join('');
 }
 
+const headOf = (record: RollUpRecord): Row => ({
+  stamp: record.stamp,
+  assembly: record.assembly,
+  state: record.state,
+  units: 'SI',
+  commit: record.provenance.commit ?? '',
+});
+
+const selectionRows = (record: RollUpRecord, part: PartSelection): Row[] =>
+  (['basic', 'predicted'] as const).flatMap((on) =>
+    bothTensors({ ...headOf(record), kind: 'part', name: part.path, on, axes: 'body' }, part[on]),
+  );
+
 function rowsOf(record: RollUpRecord): Row[] {
-  const head: Row = {
-    stamp: record.stamp,
-    assembly: record.assembly,
-    state: record.state,
-    units: 'SI',
-    commit: record.provenance.commit ?? '',
-  };
+  const head = headOf(record);
   const rows: Row[] = [];
   for (const on of ['basic', 'predicted'] as const) {
     rows.push(...bothTensors({ ...head, kind: 'total', name: '', on, axes: 'body' }, record[on]));

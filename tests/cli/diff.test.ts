@@ -74,6 +74,35 @@ describe('steelyard diff', () => {
     ]);
   });
 
+  it('takes a percentage as one of A’s value, where a share of that means something', async () => {
+    const test = new CliTest().file('a.yaml', machine('100', '400')).file('b.yaml', machine('106', '400'));
+    const over = (limit: string) => test.steelyard('diff', 'a.yaml', 'b.yaml', '--fail-over', limit);
+    // 6 g of 400 g is 1.5 %.
+    expect((await over('mass=1.6 %')).status).toBe(0);
+    const mass = await over('mass=1%');
+    expect([mass.status, mass.stderr]).toEqual([
+      1,
+      expect.stringContaining('the change is 6 g, more than 4 g'),
+    ]);
+    for (const [limit, says] of [
+      ['centre.x=1%', 'a place, a product or an angle'],
+      ['inertia.xy=1%', 'a percentage of zero'],
+      ['inertia.xx=1%', 'a percentage of zero'],
+      ['mass=1% + 1', 'more than a number and %'],
+    ] as const) {
+      const { status, stderr } = await over(limit);
+      expect([limit, status, stderr.replace(/\s+/g, ' ')]).toEqual([limit, 2, expect.stringContaining(says)]);
+    }
+  });
+
+  it('attributes the quantity that is asked for, to as many parts as asked for, in Markdown as well', async () => {
+    const test = new CliTest().file('a.yaml', machine('100', '400')).file('b.yaml', machine('106', '410'));
+    const { stdout } = await test.steelyard(
+      ...['diff', 'a.yaml', 'b.yaml', '--quantity', 'inertia.yy', '--parts', '1', '-f', 'markdown'],
+    );
+    expect(stdout.match(/### Who moved it.*/g)).toEqual([expect.stringContaining('Iyy about the centre')]);
+  });
+
   it('prints a table within 80 columns whose contributions add up, and Markdown', async () => {
     const test = new CliTest().file('a.yaml', machine('100', '400')).file('b.yaml', machine('106', '410'));
     const { stdout } = await test.steelyard('diff', 'a.yaml', 'b.yaml', '--format', 'table');

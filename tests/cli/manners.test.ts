@@ -45,6 +45,17 @@ describe('the command line', () => {
     [['run', 'one.yaml', '--frame', 'nose'], /CALL_FRAME/],
     [['run', 'one.yaml', '--about', '1,2', '--format', 'table'], /CALL_ABOUT/],
     [['run', 'one.yaml', '--parts', 'some', '--format', 'table'], /CALL_PARTS/],
+    [['run', 'one.yaml', '--about', 'foo'], /CALL_ABOUT/],
+    [['run', 'one.yaml', '--about', '1e300,0,0'], /CALL_ABOUT/],
+    [['check', 'one.yaml', '--parts', 'x', '--format', 'csv'], /CALL_PARTS/],
+    [['check', 'one.yaml', '--as-of', '2026-02-30'], /CALL_DAY/],
+    [['run', 'one.yaml', '--of', 'p', '--format', 'junit'], /CALL_OF.*junit/s],
+    [['run', 'one.yaml', '--of', 'p', '-o', 'x.md', '-o', 'x.xml'], /CALL_OF.*junit/s],
+    [['diff', 'one.yaml', 'one.yaml', '--units', 'furlong'], /UNITS_UNKNOWN/],
+    [['diff', 'one.yaml', 'one.yaml', '--units', 'furlong', '-f', 'table'], /UNITS_UNKNOWN/],
+    [['diff', 'one.yaml', 'one.yaml', '--parts', 'x'], /CALL_PARTS/],
+    [['diff', 'one.yaml', 'one.yaml', '--quantity', 'foo'], /CALL_QUANTITY.*known: all, mass, centre.x/s],
+    [['diff', 'one.yaml', 'one.yaml', '--quantity', 'tilt.x'], /CALL_QUANTITY/],
     [['run', 'one.yaml', '-o', 'x.bin'], /CALL_OUTPUT_FORMAT/],
     [['run', 'one.yaml', '-o', 'no/such/folder/x.json'], /FILE_NOT_WRITTEN/],
     [['run', '.'], /FILE_UNREADABLE/],
@@ -102,6 +113,21 @@ describe('the command line', () => {
     );
     expect([stdout.slice(0, 1), stderr]).toEqual(['[', '']);
   });
+
+  it.each([['run one.yaml'], ['solids'], ['--version'], ['--help']])(
+    'says so when standard output is on a full disk: %s',
+    async (call) => {
+      const { stderr, exitCode } = await execa(
+        'sh',
+        ['-c', `"${process.execPath}" "${COMMAND}" ${call} > /dev/full`],
+        { cwd: new CliTest().file('one.yaml', ONE).folder, reject: false },
+      );
+      expect([exitCode, stderr]).toEqual([
+        2,
+        expect.stringMatching(/^error FILE_NOT_WRITTEN: .*standard output.*the disk is full\nhint: .*$/),
+      ]);
+    },
+  );
 
   it('keeps an include inside the project, symbolic links resolved', async () => {
     const outside = new CliTest().file('secret.yaml', ONE);
@@ -195,6 +221,9 @@ describe('steelyard new, schema, solids, completion', () => {
     const test = new CliTest();
     const list = await test.steelyard('solids');
     expect(list.stdout).toContain('spherical_cap');
+    for (const name of [[], ['mesh'], ['revolve'], ['polyhedron']])
+      for (const line of (await test.steelyard('solids', ...name)).stdout.split('\n'))
+        expect([...line].length, line).toBeLessThanOrEqual(80);
     const one = await test.steelyard('solids', 'tube');
     expect(one.stdout).toContain('bore');
     expect((await test.steelyard('solids', 'tueb')).stderr).toContain("did you mean 'tube'?");

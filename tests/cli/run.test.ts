@@ -41,6 +41,36 @@ describe('steelyard run', () => {
     expect(stdout).toContain('local codes and licensed practice');
   });
 
+  it('gives one part’s or group’s own numbers in every format that shows them', async () => {
+    const test = new CliTest().file('two.yaml', TWO);
+    const of = async (format: string) =>
+      (await test.steelyard('run', 'two.yaml', '--of', 'tip', '--format', format)).stdout;
+    const [head, ...rows] = (await of('csv')).trimEnd().split('\n');
+    const at = (name: string) => head!.split(',').indexOf(name);
+    expect(
+      rows.map((row) => ['kind', 'name', 'on', 'about', 'mass_kg'].map((c) => row.split(',')[at(c)])),
+    ).toEqual([
+      ['part', 'tip', 'basic', 'centre', '1'],
+      ['part', 'tip', 'basic', 'origin', '1'],
+      ['part', 'tip', 'predicted', 'centre', '1'],
+      ['part', 'tip', 'predicted', 'origin', '1'],
+    ]);
+    // m x² about the origin: 1 kg at 0.3 m.
+    expect(Number(rows[1]!.split(',')[at('inertia_yy_kg_m2')])).toBeCloseTo(0.09, 15);
+    const markdown = await of('markdown');
+    expect(markdown).toContain('## two bodies, nominal: tip');
+    expect(markdown).toMatch(/\| mass \| kg \| 1\.0+ \|/);
+    expect(markdown).not.toContain('all up');
+    expect(await of('table')).toContain('Of tip');
+  });
+
+  it('says of which total the shares are', async () => {
+    const table = async (yaml: string) =>
+      (await new CliTest().file('t.yaml', yaml).steelyard('run', 't.yaml', '--format', 'table')).stdout;
+    expect(await table(TWO)).toContain('share of the basic total');
+    expect(await table(`${TWO}  growth: { estimated: 5 % }\n`)).toContain('share of the predicted total');
+  });
+
   it('leaves the exit status at 0 when a limit is broken: check judges', async () => {
     const test = new CliTest().file('two.yaml', TWO);
     expect((await test.steelyard('run', 'two.yaml')).status).toBe(0);

@@ -17,7 +17,8 @@ import {
   unitOfLimit,
 } from '../../../core/figures/index.ts';
 import { fromRows } from '../../../core/linalg/symmetric3.ts';
-import type { RollUpRecord } from '../../../core/record/record.ts';
+import type { RollUpRecord, Totals } from '../../../core/record/record.ts';
+import type { PartSelection } from '../../../core/record/select-part.ts';
 import { axesText, CAUTION, sourceText, verdictText } from '../identification.ts';
 import { chooseParts } from '../parts-section.ts';
 import { place, productsText } from '../report-context.ts';
@@ -31,8 +32,34 @@ export interface MarkdownOptions {
 }
 
 /** A summary for the page of a build: the verdict first, then limits, totals, the heaviest parts, warnings. */
-export const formatMarkdown = (records: readonly RollUpRecord[], options: MarkdownOptions): string =>
-  records.map((record) => summary(record, options)).join('\n');
+export const formatMarkdown = (
+  records: readonly RollUpRecord[],
+  options: MarkdownOptions,
+  selections: readonly PartSelection[] | null = null,
+): string =>
+  records
+    .map((record, i) =>
+      selections ? partSummary(record, selections[i]!, options) : summary(record, options),
+    )
+    .join('\n');
+
+/** One part's or group's own numbers in place of the whole's. */
+function partSummary(record: RollUpRecord, part: PartSelection, options: MarkdownOptions): string {
+  const lines = [
+    `## ${text(`${record.assembly}, ${record.state}: ${part.path}`)}`,
+    '',
+    ...totalLines(record, part, options),
+    ...sourceLines(record, options),
+  ];
+  return `${lines.join('\n')}\n`;
+}
+
+const sourceLines = (record: RollUpRecord, { products = 'negative' }: MarkdownOptions): string[] => [
+  `${text(sourceText(record))}<br>`,
+  `${text(axesText(record.conventions))}; ${text(productsText(products))}`,
+  '',
+  `_${text(CAUTION)}_`,
+];
 
 function summary(record: RollUpRecord, options: MarkdownOptions): string {
   const broken = record.limits.filter((l) => isBroken(l, options.today));
@@ -47,13 +74,10 @@ function summary(record: RollUpRecord, options: MarkdownOptions): string {
     }),
     ...(broken.length > 0 ? [''] : []),
     ...limitLines(record, options),
-    ...totalLines(record, options),
+    ...totalLines(record, record, options),
     ...partLines(record, options),
     ...remarkLines(record),
-    `${text(sourceText(record))}<br>`,
-    `${text(axesText(record.conventions))}; ${text(productsText(options.products ?? 'negative'))}`,
-    '',
-    `_${text(CAUTION)}_`,
+    ...sourceLines(record, options),
   ];
   return `${lines.join('\n')}\n`;
 }
@@ -73,7 +97,12 @@ function limitLines(record: RollUpRecord, { units, today }: MarkdownOptions): st
   return table(['limit', 'unit', 'on', 'value', 'min', 'max', 'verdict', 'margin'], 'lllrrrll', rows);
 }
 
-function totalLines(record: RollUpRecord, { units, products = 'negative' }: MarkdownOptions): string[] {
+/** @param both the whole of the record, or a part of it */
+function totalLines(
+  record: RollUpRecord,
+  both: { basic: Totals; predicted: Totals },
+  { units, products = 'negative' }: MarkdownOptions,
+): string[] {
   const shown = displayUnits(record, units);
   const { growth } = record.conventions;
   const sides = growth ? (['basic', 'predicted'] as const) : (['basic'] as const);
@@ -94,14 +123,14 @@ function totalLines(record: RollUpRecord, { units, products = 'negative' }: Mark
       ]);
     });
   };
-  add(['mass'], shown.mass, [sides.map((s) => record[s].mass)]);
+  add(['mass'], shown.mass, [sides.map((s) => both[s].mass)]);
   add(
     ['centre x', 'centre y', 'centre z'],
     shown.length,
-    [0, 1, 2].map((k) => sides.map((s) => record[s].centre?.[k] ?? null)),
+    [0, 1, 2].map((k) => sides.map((s) => both[s].centre?.[k] ?? null)),
   );
   const lines = table(['total', 'unit', ...sides], `ll${'r'.repeat(sides.length)}`, rows);
-  const { inertia, principal } = record[on];
+  const { inertia, principal } = both[on];
   if (!inertia || !principal) return lines;
   for (const [point, tensor] of [
     ['the centre of mass', inertia.aboutCentre],
