@@ -8,6 +8,7 @@ import { migrate, openDatabase } from './database.ts';
 import type { Deps } from './deps.ts';
 import { createQueues, MAIL_QUEUE, type MailJob, RECOMPUTE_QUEUE, type RecomputeJob } from './jobs/queues.ts';
 import { recomputeJob } from './jobs/recompute.ts';
+import { recoverJobs } from './jobs/recover.ts';
 import { sendMailJob } from './jobs/send-mail.ts';
 import { openTransport } from './mail/transport.ts';
 
@@ -19,6 +20,9 @@ export interface Running {
   /** Finishes the requests and jobs that it has begun, gives the others back, and closes. */
   stop(): Promise<void>;
 }
+
+/** Seconds after which what nobody works on is taken up again. */
+const RECOVER_AFTER = 600;
 
 /** The port is taken. */
 export class PortTaken extends Error {}
@@ -56,7 +60,12 @@ export async function startServer(config: Config, pages: string | null): Promise
   await boss.work<MailJob>(MAIL_QUEUE, { batchSize: 20, pollingIntervalSeconds: 1 }, (jobs) =>
     eachOnItsOwn(boss, MAIL_QUEUE, jobs, (data) => sendMailJob(data, transport)),
   );
+  await recoverJobs(sequelize, boss, 0);
+  const recovery = setInterval(() => {
+    recoverJobs(sequelize, boss, RECOVER_AFTER).catch((err) => log.warn({ err }, 'recovery'));
+  }, 60_000);
   const close = async () => {
+    clearInterval(recovery);
     await boss.stop({ graceful: true, wait: true, timeout: 20_000 }).catch(() => {});
     await computer.close();
     transport.close();

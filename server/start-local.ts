@@ -8,6 +8,7 @@ import { projectRoot } from './project-root.ts';
 import { PortTaken, type Running, startServer } from './running.ts';
 import { DEMO_PASSWORD, DEMO_SIGN_INS } from './services/demo-sign-ins.ts';
 import { stopOnSignal } from './stop-on-signal.ts';
+import { surviveDatabase } from './survive-database.ts';
 
 // npm start: a server on this machine with the demo in it. The database is found or made, and stopped at the end.
 const tell = (line: string): void => {
@@ -40,6 +41,7 @@ try {
   tell('bringing the schema up');
   const running: Running = await startServer(config, join(projectRoot(), 'dist', 'web'));
   stops.push(() => running.stop());
+  surviveDatabase(running.deps.log);
   await seedDemo(running.deps, tell);
   process.stdout.write(`
 Steelyard is at ${config.PUBLIC_URL}

@@ -4,6 +4,7 @@ import { ForeignKeyConstraintError, UniqueConstraintError } from 'sequelize';
 import type { Problem } from '#core/api/problem.ts';
 import { InputError } from '#core/errors.ts';
 import { conflict, notFound, ProblemError } from '../problem.ts';
+import { isDatabaseAway, stateOf } from '../services/database-away.ts';
 
 const TITLES: Record<number, string> = {
   400: 'The request is not right',
@@ -53,7 +54,7 @@ function problemOf(error: unknown): ProblemError {
       'load again',
     );
   if (error instanceof multer.MulterError) return uploadProblem(error);
-  const { status, type, name } = error as { status?: number; type?: string; name?: string };
+  const { status, type } = error as { status?: number; type?: string };
   if (type === 'entity.too.large')
     return new ProblemError(413, 'BODY_TOO_LARGE', 'expected a smaller body', { hint: 'send less at once' });
   if (status === 415) return new ProblemError(415, 'BODY_ENCODING', 'expected gzip or no encoding');
@@ -66,7 +67,7 @@ function problemOf(error: unknown): ProblemError {
         hint: 'send JSON, whole, as UTF-8',
       },
     );
-  if (/^Sequelize(Connection|Database.*shut|ConnectionAcquire)/.test(name ?? '') || isShutdown(error))
+  if (isDatabaseAway(error))
     return new ProblemError(503, 'DATABASE_AWAY', 'expected the database to answer, found that it does not', {
       hint: 'nothing was done; try again in a moment',
       retryAfter: 2,
@@ -79,17 +80,6 @@ function problemOf(error: unknown): ProblemError {
   return new ProblemError(500, 'BUG', 'the server has a fault; the request id stands in its log', {
     hint: 'report it with the request id',
   });
-}
-
-/** PostgreSQL says by class 57P that it stops or starts; the driver says that the line broke. */
-const isShutdown = (error: unknown): boolean =>
-  /^57P|^08|ECONN|EPIPE/.test(stateOf(error)) ||
-  /Connection terminated/.test((error as { message?: string }).message ?? '');
-
-/** The SQLSTATE or the system's code of an error; '' where it has none. */
-function stateOf(error: unknown): string {
-  const { original, code } = error as { original?: { code?: string }; code?: string };
-  return original?.code ?? code ?? '';
 }
 
 function uploadProblem(error: multer.MulterError): ProblemError {
