@@ -11,6 +11,8 @@ const ASCII: Readonly<Record<string, string>> = {
   '—': '-',
   '…': '...',
   '√': 'sqrt ',
+  '≤': '<=',
+  '≥': '>=',
   Δ: 'change ',
   '─': '-',
   '━': '=',
