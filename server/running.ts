@@ -8,6 +8,7 @@ import { migrate, openDatabase } from './database.ts';
 import type { Deps } from './deps.ts';
 import { createQueues, MAIL_QUEUE, type MailJob, RECOMPUTE_QUEUE, type RecomputeJob } from './jobs/queues.ts';
 import { recomputeJob } from './jobs/recompute.ts';
+import { recomputeSoon } from './jobs/recompute-soon.ts';
 import { recoverJobs } from './jobs/recover.ts';
 import { sendMailJob } from './jobs/send-mail.ts';
 import { openTransport } from './mail/transport.ts';
@@ -22,7 +23,7 @@ export interface Running {
 }
 
 /** Seconds after which what nobody works on is taken up again. */
-const RECOVER_AFTER = 600;
+const RECOVER_AFTER = 120;
 
 /** The port is taken. */
 export class PortTaken extends Error {}
@@ -51,7 +52,8 @@ export async function startServer(config: Config, pages: string | null): Promise
     seconds: config.RECOMPUTE_SECONDS,
     megabytes: config.RECOMPUTE_MEGABYTES,
   });
-  const deps: Deps = { config, sequelize, boss, computer, log };
+  const soon = recomputeSoon(boss, log);
+  const deps: Deps = { config, sequelize, boss, recomputeSoon: soon, computer, log };
   const transport = openTransport(config);
   for (let i = 0; i < config.WORKERS; i++)
     await boss.work<RecomputeJob>(RECOMPUTE_QUEUE, { batchSize: 20, pollingIntervalSeconds: 0.5 }, (jobs) =>
@@ -66,6 +68,7 @@ export async function startServer(config: Config, pages: string | null): Promise
   }, 60_000);
   const close = async () => {
     clearInterval(recovery);
+    await soon.flush();
     await boss.stop({ graceful: true, wait: true, timeout: 20_000 }).catch(() => {});
     await computer.close();
     transport.close();

@@ -10,7 +10,7 @@ export interface RecomputeJob {
 export interface MailJob {
   readonly mail: string;
 }
-type Jobs = { [RECOMPUTE_QUEUE]: RecomputeJob; [MAIL_QUEUE]: MailJob };
+type Jobs = { [MAIL_QUEUE]: MailJob };
 
 /** The driver's own connection of a Sequelize transaction. */
 interface WithConnection {

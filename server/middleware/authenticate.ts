@@ -25,7 +25,8 @@ export async function authenticate(request: Request, deps: Deps): Promise<Caller
 async function byToken(header: string): Promise<Caller> {
   const secret = /^Bearer (\S+)$/i.exec(header)?.[1];
   const token =
-    secret && (await Token.findOne({ where: { secretHash: hashSecret(secret) }, include: 'person' }));
+    secret &&
+    (await Token.findOne({ where: { secretHash: hashSecret(secret) }, include: ['person', 'project'] }));
   const refuse = (found: string) =>
     new ProblemError(401, 'TOKEN_NOT_VALID', `expected a valid token, found ${found}`, {
       hint: 'make a new one on the page Tokens',

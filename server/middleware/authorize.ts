@@ -47,10 +47,12 @@ function checkScope(route: Route, scope: 'read' | 'push'): void {
     });
 }
 
-async function accessTo(slug: string, { person, token }: Caller): Promise<Access> {
-  const project = await Project.findOne({ where: { slug } });
-  if (!project || (token && token.projectId !== project.id)) throw notFound(`the project '${slug}'`);
-  const role = await roleIn(project, { person, token, session: null });
+async function accessTo(slug: string, caller: Caller): Promise<Access> {
+  const { token } = caller;
+  // A token brings its project; there is no other that it could mean.
+  const project = token ? token.project! : await Project.findOne({ where: { slug } });
+  if (!project || project.slug !== slug) throw notFound(`the project '${slug}'`);
+  const role = await roleIn(project, caller);
   if (!role) throw notFound(`the project '${slug}'`);
   return { project, role };
 }

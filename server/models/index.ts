@@ -60,6 +60,7 @@ export function mapModels(sequelize: Sequelize): void {
   Membership.belongsTo(Project, { as: 'project', foreignKey: 'projectId' });
   Invitation.belongsTo(Person, { as: 'inviter', foreignKey: 'invitedBy' });
   Invitation.belongsTo(Project, { as: 'project', foreignKey: 'projectId' });
+  Token.belongsTo(Project, { as: 'project', foreignKey: 'projectId' });
   Token.belongsTo(Person, { as: 'person', foreignKey: 'personId' });
   Comment.belongsTo(Person, { as: 'person', foreignKey: 'personId' });
 }

@@ -9,6 +9,7 @@ import {
 } from 'sequelize';
 import { column, initModel } from './model.ts';
 import type { Person } from './person.ts';
+import type { Project } from './project.ts';
 
 /** What a command or a CI job shows instead of a password; its secret is kept as a hash alone. */
 export class Token extends Model<InferAttributes<Token>, InferCreationAttributes<Token>> {
@@ -25,6 +26,7 @@ export class Token extends Model<InferAttributes<Token>, InferCreationAttributes
   declare lastUsedAt: CreationOptional<Date | null>;
   declare revokedAt: CreationOptional<Date | null>;
   declare person?: NonAttribute<Person>;
+  declare project?: NonAttribute<Project>;
 
   static map(sequelize: Sequelize): void {
     const { id, integer, text, now, date, maybeDate } = column;

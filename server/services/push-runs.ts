@@ -6,7 +6,6 @@ import type { RollUpRecord } from '#core/record/record.ts';
 import { stampOf } from '#core/record/stamp.ts';
 import { inTransaction } from '../database.ts';
 import type { Deps } from '../deps.ts';
-import { RECOMPUTE_QUEUE, sendJob } from '../jobs/queues.ts';
 import type { Access, Caller } from '../middleware/caller.ts';
 import { tellOfLimits } from './limit-mail.ts';
 import { contentOf, packContent } from './record-content.ts';
@@ -26,7 +25,7 @@ type Answer = Pushed['runs'][number];
 
 /**
  * Takes records in: each stamp's content once, each record from one origin as one run. What is new is in the history
- * when this returns, with a job that computes it again; all of a request or nothing of it.
+ * when this returns, and is computed again soon; all of a request or nothing of it.
  */
 export async function pushRuns(
   runs: readonly PushedRun[],
@@ -35,12 +34,15 @@ export async function pushRuns(
   deps: Deps,
 ): Promise<Answer[]> {
   const checked = runs.map((run) => ({ run, fault: faultOf(run.record) }));
-  return inTransaction(deps.sequelize, async (transaction) => {
-    const answers: Answer[] = [];
+  const made: string[] = [];
+  const answers = await inTransaction(deps.sequelize, async (transaction) => {
+    const all: Answer[] = [];
     for (const { run, fault } of checked)
-      answers.push(fault ? refused(fault) : await pushRun(run, caller, access, deps, transaction));
-    return answers;
+      all.push(fault ? refused(fault) : await pushRun(run, caller, access, deps, made, transaction));
+    return all;
   });
+  for (const record of made) deps.recomputeSoon.add(record);
+  return answers;
 }
 
 const refused = (fault: Fault): Answer => ({ status: 'refused', id: null, address: null, fault });
@@ -99,69 +101,64 @@ function textFault(record: RollUpRecord): Fault | null {
   }
 }
 
+/** @param made gets the record's id where its content is new and not yet computed here */
 async function pushRun(
-  { record, key, drawing, at }: PushedRun,
+  pushed: PushedRun,
   caller: Caller,
   { project }: Access,
   deps: Deps,
+  made: string[],
   transaction: Transaction,
 ): Promise<Answer> {
-  const { sequelize } = deps;
-  const { content, contentSha256 } = packContent(contentOf(record));
-  // One statement: what is there already is found, not written again, however many send it at once.
-  const [stored] = await sequelize.query<{ id: string; content_sha256: string; made: boolean }>(
-    `INSERT INTO records (project_id, stamp, content_sha256, content, drawing, recomputation, recomputed_at)
-     VALUES ($1, $2, $3, $4, $5, $6, $7)
-     ON CONFLICT (project_id, stamp) DO UPDATE SET stamp = EXCLUDED.stamp
-     RETURNING id, content_sha256, (xmax = 0) AS made`,
-    {
-      bind: [
-        project.id,
-        record.stamp,
-        contentSha256,
-        content,
-        drawing ?? null,
-        drawing ? 'recomputed' : 'waiting',
-        drawing ? new Date() : null,
-      ],
-      type: QueryTypes.SELECT,
-      transaction,
-    },
-  );
-  if (stored!.content_sha256 !== contentSha256)
+  const { record, drawing } = pushed;
+  const found = await insertRun(pushed, caller, project.id, deps, transaction);
+  if (found.contradicts)
     return refused({
       code: 'RECORD_CONTRADICTS',
       message: `expected the record that the server has under stamp ${record.stamp.slice(0, 12)}, found other figures`,
       hint: 'one stamp is one record: compute it again with an unchanged steelyard and push that',
     });
-  const run = await insertRun(stored!.id, record, key, at, caller, project.id, deps, transaction);
-  if (stored!.made && !drawing)
-    await sendJob(deps.boss, RECOMPUTE_QUEUE, { record: stored!.id }, transaction);
-  if (run.made) await tellOfLimits(run.id, record, project, deps, transaction);
+  if (found.new_record && drawing === undefined) made.push(found.record_id);
+  if (found.run_id) await tellOfLimits(found.run_id, record, project, deps, transaction);
+  const id = found.run_id ?? (await knownRun(found.record_id, originOf(pushed), deps, transaction));
   return {
-    status: run.made ? 'created' : 'known',
-    id: run.id,
-    address: `${deps.config.PUBLIC_URL}/projects/${project.slug}/runs/${run.id}`,
+    status: found.run_id ? 'created' : 'known',
+    id,
+    address: `${deps.config.PUBLIC_URL}/projects/${project.slug}/runs/${id}`,
     fault: null,
   };
 }
 
+const originOf = ({ record, key }: PushedRun): string =>
+  record.provenance.commit ? `commit:${record.provenance.commit}` : `push:${key}`;
+
+interface Inserted {
+  readonly record_id: string;
+  readonly new_record: boolean;
+  readonly contradicts: boolean;
+  /** Null where the run was there already, or the record contradicts. */
+  readonly run_id: string | null;
+}
+
+/** One statement: what is there already is found, not written again, however many send it at once. */
 async function insertRun(
-  recordId: string,
-  record: RollUpRecord,
-  key: string,
-  at: Date | undefined,
+  pushed: PushedRun,
   { person, token }: Caller,
   projectId: number,
   { sequelize }: Deps,
   transaction: Transaction,
-): Promise<{ id: string; made: boolean }> {
+): Promise<Inserted> {
+  const { record, drawing, at } = pushed;
   const { provenance } = record;
+  const { content, contentSha256 } = packContent(contentOf(record));
   const columns = runColumns(record, new Date().toISOString().slice(0, 10));
   const bind = [
     projectId,
-    recordId,
-    provenance.commit ? `commit:${provenance.commit}` : `push:${key}`,
+    record.stamp,
+    contentSha256,
+    content,
+    drawing ?? null,
+    originOf(pushed),
     columns.assembly,
     columns.state,
     provenance.branch ?? '',
@@ -181,31 +178,43 @@ async function insertRun(
     JSON.stringify(columns.fileUnits),
     JSON.stringify(provenance),
   ];
-  const [made] = await sequelize.query<{ id: string }>(
-    `WITH run AS (
-       INSERT INTO runs (project_id, record_id, origin, assembly, state, branch, verdict, at, commit, tag, dirty, author,
-         person_id, token_id, judged_on, mass, figures, nearest, outside, file_units, provenance)
-       VALUES ($1, $2, $3, $4, $5, $6, $7, coalesce($8::timestamptz, clock_timestamp()), $9, $10, $11, $12, $13, $14,
-         $15, $16, $17, $18, $19, $20::jsonb, $21::jsonb)
-       ON CONFLICT (record_id, origin) DO NOTHING RETURNING id
-     ), seen AS (
-       INSERT INTO choices (project_id, kind, value)
-       SELECT $1, kind, value FROM (VALUES ('assembly', $4), ('state', $5), ('branch', $6)) AS c (kind, value)
-       WHERE value <> '' AND NOT EXISTS (
-         SELECT 1 FROM choices o WHERE o.project_id = $1 AND o.kind = c.kind AND o.value = c.value)
-       ON CONFLICT DO NOTHING
-     )
-     SELECT id FROM run`,
-    { bind, type: QueryTypes.SELECT, transaction },
-  );
-  if (made) return { id: made.id, made: true };
+  const [found] = await sequelize.query<Inserted>(INSERT_RUN, { bind, type: QueryTypes.SELECT, transaction });
+  return found!;
+}
+
+const INSERT_RUN = `
+  WITH record AS (
+    INSERT INTO records (project_id, stamp, content_sha256, content, drawing, recomputation, recomputed_at)
+    VALUES ($1, $2, $3, $4, $5::text, CASE WHEN $5::text IS NULL THEN 'waiting' ELSE 'recomputed' END,
+      CASE WHEN $5::text IS NULL THEN NULL ELSE now() END)
+    ON CONFLICT (project_id, stamp) DO UPDATE SET stamp = EXCLUDED.stamp
+    RETURNING id, (xmax = 0) AS new, content_sha256 <> $3 AS contradicts
+  ), run AS (
+    INSERT INTO runs (project_id, record_id, origin, assembly, state, branch, verdict, at, commit, tag, dirty, author,
+      person_id, token_id, judged_on, mass, figures, nearest, outside, file_units, provenance)
+    SELECT $1, id, $6, $7, $8, $9, $10, coalesce($11::timestamptz, clock_timestamp()), $12, $13, $14::boolean, $15,
+      $16::int, $17::int, $18, $19::float8, $20::float8[], $21::text[], $22::text[], $23::jsonb, $24::jsonb
+    FROM record WHERE NOT contradicts
+    ON CONFLICT (record_id, origin) DO NOTHING RETURNING id
+  ), seen AS (
+    INSERT INTO choices (project_id, kind, value)
+    SELECT $1, kind, value FROM run, (VALUES ('assembly', $7), ('state', $8), ('branch', $9)) AS c (kind, value)
+    WHERE value <> '' AND NOT EXISTS (
+      SELECT 1 FROM choices o WHERE o.project_id = $1 AND o.kind = c.kind AND o.value = c.value)
+    ON CONFLICT DO NOTHING
+  )
+  SELECT record.id AS record_id, record.new AS new_record, record.contradicts, run.id AS run_id
+  FROM record LEFT JOIN run ON true`;
+
+async function knownRun(
+  recordId: string,
+  origin: string,
+  { sequelize }: Deps,
+  transaction: Transaction,
+): Promise<string> {
   const [known] = await sequelize.query<{ id: string }>(
     'SELECT id FROM runs WHERE record_id = $1 AND origin = $2',
-    {
-      bind: [recordId, bind[2]],
-      type: QueryTypes.SELECT,
-      transaction,
-    },
+    { bind: [recordId, origin], type: QueryTypes.SELECT, transaction },
   );
-  return { id: known!.id, made: false };
+  return known!.id;
 }
