@@ -56,7 +56,7 @@ export async function startServer(config: Config, pages: string | null): Promise
   const deps: Deps = { config, sequelize, boss, recomputeSoon: soon, computer, log };
   const transport = openTransport(config);
   for (let i = 0; i < config.WORKERS; i++)
-    await boss.work<RecomputeJob>(RECOMPUTE_QUEUE, { batchSize: 20, pollingIntervalSeconds: 0.5 }, (jobs) =>
+    await boss.work<RecomputeJob>(RECOMPUTE_QUEUE, { batchSize: 60, pollingIntervalSeconds: 0.5 }, (jobs) =>
       eachOnItsOwn(boss, RECOMPUTE_QUEUE, jobs, (data) => recomputeJob(data, computer)),
     );
   await boss.work<MailJob>(MAIL_QUEUE, { batchSize: 20, pollingIntervalSeconds: 1 }, (jobs) =>

@@ -32,7 +32,7 @@ export function recomputeSoon(boss: PgBoss, log: Logger): RecomputeSoon {
   return {
     add: (record) => {
       gathered.push(record);
-      timer ??= setTimeout(() => void flush(), GATHER_MS);
+      if (timer === null) timer = setTimeout(() => void flush(), GATHER_MS);
     },
     flush,
   };
