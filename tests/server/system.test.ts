@@ -1,3 +1,5 @@
+import { readFileSync } from 'node:fs';
+import { join } from 'node:path';
 import { QueryTypes } from 'sequelize';
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest';
 import { CONTRACT } from '#core/api/contract.ts';
@@ -156,5 +158,13 @@ describe('the server', () => {
     } finally {
       await slow.stop();
     }
+  });
+});
+
+describe('README.md', () => {
+  it('documents every variable of the environment, as the server itself does', () => {
+    const text = readFileSync(join(import.meta.dirname, '..', '..', 'README.md'), 'utf8');
+    for (const [name, { description }] of Object.entries(configSchema.shape))
+      expect(text, name).toContain(`| \`${name}\` | ${description} |`);
   });
 });
