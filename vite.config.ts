@@ -11,5 +11,5 @@ export default defineConfig({
   plugins: [react(), tailwind()],
   resolve: { alias: { '#core': here('core'), '#web': here('web') } },
   build: { outDir: here('dist/web'), emptyOutDir: true, assetsInlineLimit: 0 },
-  server: { proxy: { '/api': 'http://127.0.0.1:4780' }, fs: { allow: [here('.')] } },
+  server: { proxy: { '^/api/(?!.*\\.ts(\\?|$))': 'http://127.0.0.1:4780' }, fs: { allow: [here('.')] } },
 });

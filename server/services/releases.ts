@@ -26,7 +26,11 @@ export function reasonsAgainst(
   const own = ownership(whole, caller);
   const state = release?.state ?? null;
   const needs = (least: 'engineer' | 'approver') =>
-    signed && hasRole(role, least) ? null : `This takes the role of an ${least} and a sign-in.`;
+    !hasRole(role, least)
+      ? `This takes the role of an ${least}.`
+      : signed
+        ? null
+        : 'This is done in the browser, signed in.';
   return {
     ask: needs('engineer') ?? unfit ?? (state === null ? null : said[state]),
     check:

@@ -68,7 +68,7 @@ export function PartsSection({
   return (
     <section aria-labelledby="parts">
       <SectionHead title="Parts" id="parts">
-        share of the predicted total · {record.parts.length} parts
+        share of the {record.conventions.growth ? 'predicted ' : ''}total · {record.parts.length} parts
         <span className="screen-only">
           {' · '}
           <Button kind="word" onClick={() => setOpen(new Set(groups))} disabled={open.size === groups.length}>
