@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto';
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import type { CreationAttributes } from 'sequelize';
 import type { Provenance, RollUpRecord } from '#core/record/record.ts';
 import type { UploadResult } from '../compute/tasks.ts';
 import { inTransaction } from '../database.ts';
@@ -36,12 +37,13 @@ export async function seedDemo(deps: Deps, tell: (line: string) => void): Promis
   project.slug = SLUG;
   const callers = await makeCallers(project, people);
   const files = apply(readExamples(), BEGINNING);
-  const start = Date.now();
+  const stage: Stage = { project, people, callers, start: Date.now(), trail: [] };
   for (const [i, commit] of COMMITS.entries()) {
     tell(`making the demo: ${i + 1} of ${COMMITS.length} commits`);
     apply(files, commit.edits);
-    await pushCommit(commit, i, files, { project, people, callers, start }, deps);
+    await pushCommit(commit, i, files, stage, deps);
   }
+  await AuditEntry.bulkCreate(stage.trail.sort((a, b) => a.at.getTime() - b.at.getTime()));
   await Project.update({ slug: SLUG }, { where: { id: project.id } });
 }
 
@@ -50,7 +52,11 @@ interface Stage {
   readonly people: Readonly<Record<Who, Person>>;
   readonly callers: Readonly<Record<'ci' | Pusher, Caller>>;
   readonly start: number;
+  /** What the audit trail tells, to be written in the order of time. */
+  readonly trail: Trail[];
 }
+
+type Trail = CreationAttributes<AuditEntry> & { at: Date };
 
 async function makePeople({ config }: Deps): Promise<Record<Who, Person>> {
   const passwordHash = await hashPassword(DEMO_PASSWORD, Math.min(config.PASSWORD_COST, 10));
@@ -207,21 +213,17 @@ async function makeRelease(
     );
     await Run.update({ release: state }, { where: { id: runId }, transaction });
     const note = (who: Who, action: string, hours: number, what: string) =>
-      AuditEntry.create(
-        {
-          who: people[who].name,
-          action,
-          project: SLUG,
-          what: `${what} run ${runId} (${message})`,
-          address: null,
-          at: after(hours),
-        },
-        { transaction },
-      );
-    await note(preparedBy, 'release.asked', 2, 'asked for the release of');
-    if (checkedBy) await note(checkedBy, 'release.checked', 20, 'checked');
-    if (approvedBy) await note(approvedBy, 'release.made', 30, 'released');
-    if (withdrawn)
-      await note(withdrawn.by, 'release.withdrawn', withdrawn.days * 24, 'withdrew the release of');
+      stage.trail.push({
+        who: people[who].name,
+        action,
+        project: SLUG,
+        what: `${what} run ${runId} (${message})`,
+        address: null,
+        at: after(hours),
+      });
+    note(preparedBy, 'release.asked', 2, 'asked for the release of');
+    if (checkedBy) note(checkedBy, 'release.checked', 20, 'checked');
+    if (approvedBy) note(approvedBy, 'release.made', 30, 'released');
+    if (withdrawn) note(withdrawn.by, 'release.withdrawn', withdrawn.days * 24, 'withdrew the release of');
   });
 }
