@@ -48,12 +48,7 @@ export function endOnFailedStream(): void {
  */
 export function writeWhole(path: string, text: string, mode?: number): void {
   const beside = `${path}.${process.pid}.part`;
-  let interrupted = false;
-  const note = () => {
-    interrupted = true;
-  };
-  // While the two calls run a signal waits; it is obeyed when the file stands.
-  process.once('SIGINT', note);
+  const release = holdInterrupt();
   try {
     writeFileSync(beside, text, mode === undefined ? {} : { mode });
     renameSync(beside, path);
@@ -68,11 +63,25 @@ export function writeWhole(path: string, text: string, mode?: number): void {
       },
     ]);
   } finally {
+    release();
+  }
+}
+
+let held = 0;
+let interrupted = false;
+const noteInterrupt = () => {
+  interrupted = true;
+};
+
+/** While a file is written Ctrl-C waits; it is obeyed when the file stands. One listener serves however many files. */
+function holdInterrupt(): () => void {
+  if (held++ === 0) process.on('SIGINT', noteInterrupt);
+  return () =>
     setImmediate(() => {
-      process.removeListener('SIGINT', note);
+      if (--held > 0) return;
+      process.removeListener('SIGINT', noteInterrupt);
       if (interrupted) process.exit(EXIT.interrupted);
     });
-  }
 }
 
 /** Why a file could not be written, in words that follow "found that". */
