@@ -68,7 +68,15 @@ export async function buildServer() {
 
 export async function buildWeb() {
   const { build } = await import('vite');
-  await build({ configFile: join(root, 'vite.config.ts'), logLevel: 'warn' });
+  const { NODE_ENV } = process.env;
+  // What is built is for use, whatever the environment is for: React's own checks stay out.
+  process.env.NODE_ENV = 'production';
+  try {
+    await build({ configFile: join(root, 'vite.config.ts'), logLevel: 'warn' });
+  } finally {
+    if (NODE_ENV === undefined) delete process.env.NODE_ENV;
+    else process.env.NODE_ENV = NODE_ENV;
+  }
 }
 
 export async function buildIfStale(tell) {
@@ -76,6 +84,10 @@ export async function buildIfStale(tell) {
     tell('building the server');
     await buildServer();
   }
+  await buildWebIfStale(tell);
+}
+
+export async function buildWebIfStale(tell) {
   if (isStale(join(root, 'dist', 'web', 'index.html'), WEB_SOURCES)) {
     tell('building the dashboard');
     await buildWeb();

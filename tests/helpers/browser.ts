@@ -94,6 +94,9 @@ export async function settled(page: Page): Promise<void> {
   await page.locator('.waiting').first().waitFor({ state: 'detached' });
 }
 
+/** As `expect.poll`, with patience for a busy machine. */
+export const eventually = <T>(look: () => T) => expect.poll(look, { timeout: PATIENCE_MS });
+
 /** What axe finds against WCAG 2.2 AA: the rule and where, a line each. */
 export async function faultsOfAxe(page: Page): Promise<string[]> {
   const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];

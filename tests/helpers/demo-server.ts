@@ -6,7 +6,7 @@ import { seedDemo } from '#server/demo/seed.ts';
 import { StoredRecord } from '#server/models/index.ts';
 import { projectRoot } from '#server/project-root.ts';
 import { DEMO_PASSWORD } from '#server/services/demo-sign-ins.ts';
-import { buildIfStale } from '../../server/build.js';
+import { buildWebIfStale } from '../../server/build.js';
 import { TestServer, until } from './test-server.ts';
 
 export const PETREL = 'petrel';
@@ -18,7 +18,7 @@ export const signInOf = (who: Who) => ({ email: TEAM[who].email, password: DEMO_
 /** A server that shows the dashboard as its sources are now; its database is empty. */
 export const startDashboard = (more: Record<string, string> = {}): Promise<TestServer> =>
   oneAtATime(async () => {
-    await buildIfStale((line: string) => console.error(line));
+    await buildWebIfStale((line: string) => console.error(line));
     return TestServer.start(more, join(projectRoot(), 'dist', 'web'));
   });
 

@@ -19,16 +19,16 @@ import { PageHead } from '#web/components/page-head.tsx';
 import { SectionHead } from '#web/components/section-head.tsx';
 import { Choice } from '#web/components/sentence/choice.tsx';
 import { View } from '#web/components/view.tsx';
+import { useChangeAddress } from '#web/hooks/use-change-address.ts';
 import { useProject } from '#web/hooks/use-project.ts';
 import { linkTo } from '#web/paths.ts';
 
 /** What moved between two runs, and which part moved it; the address reproduces the view. */
 export function Component() {
   const project = useProject();
-  const [search, setSearch] = useSearchParams();
+  const [search] = useSearchParams();
+  const change = useChangeAddress({ replace: true });
   const view = readCompareView(search);
-  const change = (changes: Record<string, string | null>) =>
-    setSearch(withKeys(search, changes), { preventScrollReset: true, replace: true });
   if (view.a === '' || view.b === '') return <NoSides project={project.slug} />;
   return (
     <Compared

@@ -11,19 +11,19 @@ import { TrendSection } from '#web/components/history/trend.tsx';
 import { useTwoChosen } from '#web/components/history/use-two-chosen.ts';
 import { PageHead } from '#web/components/page-head.tsx';
 import { View } from '#web/components/view.tsx';
+import { useChangeAddress } from '#web/hooks/use-change-address.ts';
 import { useProject } from '#web/hooks/use-project.ts';
 import { atLeast } from '#web/lib/roles.ts';
 
 /** A project's runs: filters as a sentence, the trend of a quantity, the list; all of it in the address. */
 export function Component() {
   const project = useProject();
-  const [search, setSearch] = useSearchParams();
+  const [search] = useSearchParams();
+  const change = useChangeAddress();
   const view = readHistoryView(search);
   const runs = useQuery({ ...runsQuery(project.slug, view), placeholderData: keepPreviousData });
   const choices = useQuery(choicesQuery(project.slug));
   const { chosen, choose } = useTwoChosen();
-  const change = (changes: Record<string, string | null>) =>
-    setSearch(withKeys(search, changes), { preventScrollReset: true });
   const none = runs.data?.rows.length === 0 && !isFiltered(view) && view.cursor === undefined;
   return (
     <>

@@ -3,7 +3,6 @@ import { useParams, useSearchParams } from 'react-router-dom';
 import type { RunDetail } from '#core/api/runs.ts';
 import { asProblem } from '#web/api/api-problem.ts';
 import { runQuery } from '#web/api/run.ts';
-import { withKeys } from '#web/components/history/history-view.ts';
 import { Notice } from '#web/components/notice.tsx';
 import { PageHead } from '#web/components/page-head.tsx';
 import { ProblemPage } from '#web/components/problem-page.tsx';
@@ -27,6 +26,7 @@ import { ThreeViewSection } from '#web/components/run/three-view.tsx';
 import { TotalsSection } from '#web/components/run/totals.tsx';
 import { ViewSentence } from '#web/components/run/view-sentence.tsx';
 import { View } from '#web/components/view.tsx';
+import { useChangeAddress } from '#web/hooks/use-change-address.ts';
 import { useProject } from '#web/hooks/use-project.ts';
 
 /** One run: what it is, its figures in the reader's own conventions, its limits, its parts, and its release. */
@@ -59,10 +59,9 @@ function RunPage({
   projectName: string;
 }) {
   const { record, run } = detail;
-  const [search, setSearch] = useSearchParams();
+  const [search] = useSearchParams();
+  const change = useChangeAddress({ replace: true });
   const view = readRunView(search, record);
-  const change = (changes: Record<string, string | null>) =>
-    setSearch(withKeys(search, changes), { preventScrollReset: true, replace: true });
   const sort = SORTS.find((s) => s === search.get('sort')) ?? 'mass';
   return (
     <>

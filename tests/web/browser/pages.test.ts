@@ -5,7 +5,15 @@ import type { Who } from '#server/demo/people.ts';
 import { stopLink } from '#server/mail/stop-link.ts';
 import { Person } from '#server/models/index.ts';
 import { linkTo, PATHS } from '#web/paths.ts';
-import { beyondEdge, faultsOfAxe, hasFocus, oneBrowser, styleOf, visit } from '../../helpers/browser.ts';
+import {
+  beyondEdge,
+  eventually,
+  faultsOfAxe,
+  hasFocus,
+  oneBrowser,
+  styleOf,
+  visit,
+} from '../../helpers/browser.ts';
 import { PETREL, signInOf, startDemo } from '../../helpers/demo-server.ts';
 import type { TestServer } from '../../helpers/test-server.ts';
 
@@ -94,7 +102,7 @@ describe.each(PAGES)('the page %s', (name) => {
     expect(Number.parseFloat(await styleOf(home, 'outlineWidth'))).toBeGreaterThanOrEqual(2);
     await page.keyboard.press('Shift+Tab');
     await page.keyboard.press('Enter');
-    await expect.poll(() => hasFocus(page.getByRole('main'))).toBe(true);
+    await eventually(() => hasFocus(page.getByRole('main'))).toBe(true);
   });
 
   it('has nothing against WCAG 2.2 AA that axe finds, in light and in dark', async () => {
@@ -105,6 +113,6 @@ describe.each(PAGES)('the page %s', (name) => {
 
   it('fits a screen of 320 pixels', async () => {
     await page.setViewportSize({ width: 320, height: 640 });
-    await expect.poll(() => beyondEdge(page)).toBe(0);
+    await eventually(() => beyondEdge(page)).toBe(0);
   });
 });

@@ -5,7 +5,9 @@ import { Button } from '#web/components/button.tsx';
 import { TextField } from '#web/components/field.tsx';
 import { Form } from '#web/components/form.tsx';
 import { ProblemNotice } from '#web/components/problem-notice.tsx';
+import { useProject } from '#web/hooks/use-project.ts';
 import { announce } from '#web/lib/announce.ts';
+import { atLeast } from '#web/lib/roles.ts';
 
 const DONE: Record<ReleaseAct['act'], string> = {
   ask: 'Release asked for',
@@ -14,9 +16,10 @@ const DONE: Record<ReleaseAct['act'], string> = {
   withdraw: 'Release withdrawn',
 };
 
-/** Ask, check, release, withdraw: what one may not do says why. */
+/** Ask, check, release, withdraw: what one's role does is there, and says why where it cannot be done now. */
 export function ReleaseActs({ detail, project }: { detail: RunDetail; project: string }) {
   const { may, needsReason, run } = detail;
+  const { role } = useProject();
   const act = useReleaseAct(project, run.id);
   const [asking, setAsking] = useState<'release' | 'withdraw' | null>(null);
   const place = useRef<HTMLDivElement>(null);
@@ -28,18 +31,36 @@ export function ReleaseActs({ detail, project }: { detail: RunDetail; project: s
   };
   const now = (what: ReleaseAct) => void perform(what).catch(() => undefined);
   const released = detail.release?.state === 'released';
+  const engineer = atLeast(role, 'engineer');
+  const approver = atLeast(role, 'approver');
   const buttons: { name: string; allowed: RunDetail['may']['ask']; onClick: () => void; shown: boolean }[] = [
-    { name: 'Ask for release', allowed: may.ask, onClick: () => now({ act: 'ask' }), shown: !released },
-    { name: 'Mark as checked', allowed: may.check, onClick: () => now({ act: 'check' }), shown: !released },
+    {
+      name: 'Ask for release',
+      allowed: may.ask,
+      onClick: () => now({ act: 'ask' }),
+      shown: engineer && !released,
+    },
+    {
+      name: 'Mark as checked',
+      allowed: may.check,
+      onClick: () => now({ act: 'check' }),
+      shown: engineer && !released,
+    },
     {
       name: needsReason ? 'Release with a reason …' : 'Release',
       allowed: may.release,
       onClick: () => (needsReason ? setAsking('release') : now({ act: 'release' })),
-      shown: !released,
+      shown: approver && !released,
     },
-    { name: 'Withdraw …', allowed: may.withdraw, onClick: () => setAsking('withdraw'), shown: released },
+    {
+      name: 'Withdraw …',
+      allowed: may.withdraw,
+      onClick: () => setAsking('withdraw'),
+      shown: approver && released,
+    },
   ];
   const shown = buttons.filter((b) => b.shown);
+  if (shown.length === 0) return null;
   return (
     <div ref={place} tabIndex={-1} className="screen-only outline-none">
       {act.error && asking === null && <ProblemNotice error={act.error} />}

@@ -63,7 +63,7 @@ function OpenList<T extends string>({
     setShift(Math.min(0, document.documentElement.clientWidth - 8 - right));
   }, [box.list]);
   return (
-    <div
+    <span
       ref={box.list}
       role="listbox"
       tabIndex={-1}
@@ -76,7 +76,7 @@ function OpenList<T extends string>({
     >
       {options.map((option, i) => (
         // biome-ignore lint/a11y/useKeyWithClickEvents: the listbox has the keys
-        <div
+        <span
           key={option.value}
           id={`${id}-${i}`}
           data-index={i}
@@ -95,8 +95,8 @@ function OpenList<T extends string>({
             {option.label}
             {option.hint && <span className="ml-2 text-sm font-normal text-ink-soft">{option.hint}</span>}
           </span>
-        </div>
+        </span>
       ))}
-    </div>
+    </span>
   );
 }

@@ -12,7 +12,7 @@ export function useListbox(labels: readonly string[], chosen: number, choose: (i
   const [open, setOpen] = useState(false);
   const [at, setAt] = useState(0);
   const button = useRef<HTMLButtonElement>(null);
-  const list = useRef<HTMLDivElement>(null);
+  const list = useRef<HTMLSpanElement>(null);
   const typed = useRef({ text: '', time: 0 });
 
   const show = () => {
