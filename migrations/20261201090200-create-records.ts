@@ -28,8 +28,9 @@ export const createRecords = sqlMigration(
     recomputed_at  timestamptz,
     drawing        text,
     created_at     timestamptz NOT NULL DEFAULT now(),
-    UNIQUE (project_id, stamp)
+    UNIQUE (project_id, stamp, content_sha256)
   );
+  CREATE INDEX records_waiting ON records (id) WHERE recomputation = 'waiting';
   ALTER TABLE records ALTER COLUMN content SET STORAGE EXTERNAL;
 
   CREATE TABLE runs (

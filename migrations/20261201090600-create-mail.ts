@@ -13,6 +13,7 @@ export const createMail = sqlMigration(
     sent_at    timestamptz,
     failure    text
   );
+  CREATE INDEX mails_unsent ON mails (id) WHERE sent_at IS NULL;
   `,
   'DROP TABLE mails',
 );

@@ -28,7 +28,7 @@ export const configSchema = z.object({
   MAIL_FROM: z.string().default('Steelyard <steelyard@localhost>').describe('the sender of mail'),
   MAIL_FOLDER: z.string().default('.steelyard/mail').describe('where mail is kept that no server sends'),
   HOST: z.string().default('127.0.0.1').describe('the address to listen on'),
-  PORT: whole(4780, 0, 65535).describe('the port to listen on'),
+  PORT: whole(4780, 1, 65535).describe('the port to listen on'),
   TRUST_PROXY: z
     .string()
     .default('loopback')

@@ -1,7 +1,9 @@
-import { existsSync } from 'node:fs';
+import { existsSync, mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { migrate, openDatabase } from './database.ts';
 import { localDatabase } from './local.ts';
-import { runTool } from './postgres/tools.ts';
+import { runTool, unpackBackup } from './postgres/tools.ts';
 
 // npm run restore -- FILE [--replace]: puts a backup back; into an empty database, or in place of what is there.
 const [file, ...options] = process.argv.slice(2);
@@ -20,12 +22,24 @@ try {
     );
     process.exitCode = 1;
   } else {
-    // One transaction: all of the backup, or the database as it was.
-    if (!isEmpty)
-      await sequelize.query(
-        'DROP SCHEMA IF EXISTS pgboss CASCADE; DROP SCHEMA public CASCADE; CREATE SCHEMA public',
-      );
-    await runTool('pg_restore', cluster.url, ['--no-owner', '--exit-on-error', '--single-transaction', file]);
+    const folder = mkdtempSync(join(tmpdir(), 'steelyard-restore-'));
+    try {
+      const sql = join(folder, 'backup.sql');
+      await unpackBackup(file, sql);
+      // One transaction: all of the backup, or the database as it was.
+      await runTool('psql', cluster.url, [
+        '--no-psqlrc',
+        '--quiet',
+        '--set=ON_ERROR_STOP=1',
+        '--single-transaction',
+        '--command=DROP SCHEMA IF EXISTS pgboss CASCADE',
+        '--command=DROP SCHEMA IF EXISTS public CASCADE',
+        '--command=CREATE SCHEMA public',
+        `--file=${sql}`,
+      ]);
+    } finally {
+      rmSync(folder, { recursive: true, force: true });
+    }
     const steps = await migrate(sequelize, cluster.url);
     process.stdout.write(
       `${file} is back${steps.length > 0 ? `, brought up by ${steps.length} steps` : ''}.\n`,

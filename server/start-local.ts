@@ -1,5 +1,5 @@
 import { join } from 'node:path';
-import { configSchema } from './config.ts';
+import { ConfigError, readConfig } from './config.ts';
 import { NewerSchema } from './database.ts';
 import { seedDemo } from './demo/seed.ts';
 import { localDatabase, localFolder, localSecret } from './local.ts';
@@ -17,25 +17,29 @@ const tell = (line: string): void => {
 
 /** What is started is stopped, in the other order, whenever the stop comes. */
 const stops: (() => Promise<void>)[] = [];
+let stopping = false;
 const stopAll = async () => {
+  stopping = true;
   tell('stopping');
-  for (const stop of stops.reverse()) await stop();
+  for (const stop of [...stops].reverse()) await stop().catch(() => {});
 };
 stopOnSignal(stopAll);
 
 try {
-  const port = process.env.PORT ?? '4780';
+  const port = process.env.PORT || '4780';
   tell('starting PostgreSQL');
-  const cluster = await localDatabase(tell);
-  stops.push(cluster.stop);
-  const config = configSchema.parse({
+  const starting = localDatabase(tell);
+  // Noted before it runs: a stop that comes meanwhile waits for it and ends it.
+  stops.push(async () => (await starting).stop());
+  const cluster = await starting;
+  const config = readConfig({
     LOG_LEVEL: 'warn',
     DEMO: 'yes',
     MAIL_FOLDER: join(localFolder(), 'mail'),
     ...process.env,
     DATABASE_URL: cluster.url,
-    PUBLIC_URL: process.env.PUBLIC_URL ?? `http://127.0.0.1:${port}`,
-    SECRET: process.env.SECRET ?? localSecret(),
+    PUBLIC_URL: process.env.PUBLIC_URL || `http://127.0.0.1:${port}`,
+    SECRET: process.env.SECRET || localSecret(),
     PORT: port,
   });
   tell('bringing the schema up');
@@ -56,9 +60,11 @@ On the command line, without a server:
 Ctrl-C stops everything that this command started; the data stays.
 `);
 } catch (error) {
-  const expected = [PostgresError, NewerSchema, PortTaken].some((kind) => error instanceof kind);
+  // Told to stop, it ends as told; what breaks on the way is no news.
+  if (stopping) await new Promise(() => {});
+  const expected = [ConfigError, PostgresError, NewerSchema, PortTaken].some((kind) => error instanceof kind);
   const { message, stack } = error as Error;
   tell(expected ? message : `it did not start: ${process.env.STEELYARD_DEBUG ? stack : message}`);
-  for (const stop of stops.reverse()) await stop().catch(() => {});
+  for (const stop of [...stops].reverse()) await stop().catch(() => {});
   process.exit(1);
 }

@@ -196,15 +196,22 @@ async function makeRelease(
         runId,
         state,
         preparedBy: people[preparedBy].id,
+        preparedName: people[preparedBy].name,
         preparedAt: after(2),
-        ...(checkedBy && { checkedBy: people[checkedBy].id, checkedAt: after(20) }),
+        ...(checkedBy && {
+          checkedBy: people[checkedBy].id,
+          checkedName: people[checkedBy].name,
+          checkedAt: after(20),
+        }),
         ...(approvedBy && {
           approvedBy: people[approvedBy].id,
+          approvedName: people[approvedBy].name,
           approvedAt: after(30),
           reason: reason ?? null,
         }),
         ...(withdrawn && {
           withdrawnBy: people[withdrawn.by].id,
+          withdrawnName: people[withdrawn.by].name,
           withdrawnAt: after(withdrawn.days * 24),
           withdrawnReason: withdrawn.reason,
         }),

@@ -23,6 +23,11 @@ export async function recoverJobs(sequelize: Sequelize, boss: PgBoss, olderThan:
     );
   for (const { id } of await orphans(RECOMPUTE_QUEUE, 'record', 'records', "t.recomputation = 'waiting'"))
     await boss.send(RECOMPUTE_QUEUE, { record: id });
-  for (const { id } of await orphans(MAIL_QUEUE, 'mail', 'mails', 't.sent_at IS NULL AND t.failure IS NULL'))
+  for (const { id } of await orphans(
+    MAIL_QUEUE,
+    'mail',
+    'mails',
+    "t.sent_at IS NULL AND t.created_at > now() - interval '3 days'",
+  ))
     await boss.send(MAIL_QUEUE, { mail: id });
 }

@@ -1,4 +1,5 @@
-import { spawn } from 'node:child_process';
+import { execFile, spawn } from 'node:child_process';
+import { promisify } from 'node:util';
 import { findPrograms, PostgresError } from './programs.ts';
 
 /**
@@ -7,26 +8,16 @@ import { findPrograms, PostgresError } from './programs.ts';
  *
  * @throws PostgresError with what the program says
  */
-export function runTool(name: 'pg_dump' | 'pg_restore', url: string, args: readonly string[]): Promise<void> {
+export function runTool(name: 'pg_dump' | 'psql', url: string, args: readonly string[]): Promise<void> {
   const folder = findPrograms();
-  const { username, password, hostname, port, pathname } = new URL(url);
-  const env = {
-    ...process.env,
-    PGUSER: decodeURIComponent(username),
-    PGPASSWORD: decodeURIComponent(password),
-    PGHOST: hostname,
-    PGPORT: port || '5432',
-    PGDATABASE: pathname.slice(1),
-  };
+  const target = new URL(url);
+  const env = { ...process.env, PGPASSWORD: decodeURIComponent(target.password) };
+  target.password = '';
   return new Promise((resolve, reject) => {
-    const child = spawn(
-      folder ? `${folder}/${name}` : name,
-      [...args, ...(name === 'pg_restore' ? ['-d', env.PGDATABASE] : [])],
-      {
-        env,
-        stdio: ['ignore', 'ignore', 'pipe'],
-      },
-    );
+    const child = spawn(folder ? `${folder}/${name}` : name, [...args, `--dbname=${target}`], {
+      env,
+      stdio: ['ignore', 'ignore', 'pipe'],
+    });
     let said = '';
     child.stderr.on('data', (data: Buffer) => {
       said += data;
@@ -40,4 +31,19 @@ export function runTool(name: 'pg_dump' | 'pg_restore', url: string, args: reado
         : reject(new PostgresError(`${name} failed:\n${said.trim().split('\n').slice(-5).join('\n')}`)),
     );
   });
+}
+
+/**
+ * Writes a backup out as SQL; a file that is no backup, or is cut short, fails here, before anything is touched.
+ *
+ * @throws PostgresError with what the program says
+ */
+export async function unpackBackup(file: string, sql: string): Promise<void> {
+  const folder = findPrograms();
+  const program = folder ? `${folder}/pg_restore` : 'pg_restore';
+  await promisify(execFile)(program, ['--no-owner', '--exit-on-error', `--file=${sql}`, file]).catch(
+    (error: { stderr?: string; message: string }) => {
+      throw new PostgresError(`pg_restore cannot read ${file}: ${(error.stderr || error.message).trim()}`);
+    },
+  );
 }

@@ -1,6 +1,6 @@
 import type { Release as ReleaseAnswer } from '#core/api/runs.ts';
 import { type Access, type Caller, hasRole } from '../middleware/caller.ts';
-import { Person, type Release } from '../models/index.ts';
+import type { Person, Release } from '../models/index.ts';
 import type { WholeRun } from './run-detail.ts';
 
 /** Why someone may not do something with a release, in a sentence; null where they may. */
@@ -32,7 +32,7 @@ export function reasonsAgainst(
         ? null
         : 'This is done in the browser, signed in.';
   return {
-    ask: needs('engineer') ?? unfit ?? (state === null ? null : said[state]),
+    ask: needs('engineer') ?? unfit ?? (state === null || state === 'withdrawn' ? null : said[state]),
     check:
       needs('engineer') ??
       unfit ??
@@ -48,7 +48,7 @@ export function reasonsAgainst(
 const said = {
   asked: 'Its release was asked for already.',
   released: 'It is released.',
-  withdrawn: 'Its release was withdrawn; push a new run instead.',
+  withdrawn: 'Its release was withdrawn; it can be asked for anew.',
 } as const;
 
 const notAsked = (state: keyof typeof said | null): string =>
@@ -71,7 +71,8 @@ function unfitness({ run, stored }: WholeRun): string | null {
 }
 
 function ownership({ run, byMachine }: WholeRun, { person }: Caller): string | null {
-  if (run.personId === person.id && !byMachine) return 'You pushed it yourself.';
+  // What a machine pushed without saying whose commit it is counts as pushed by who gave it the token.
+  if (run.personId === person.id && (!byMachine || run.author === null)) return 'You pushed it yourself.';
   return run.author !== null && isSame(run.author, person) ? 'You wrote its commit yourself.' : null;
 }
 
@@ -82,21 +83,18 @@ function isSame(author: string, { name, email }: Person): boolean {
   return mail.toLowerCase() === email || called.toLowerCase() === name.toLowerCase();
 }
 
-export async function presentRelease(release: Release): Promise<ReleaseAnswer> {
-  const ids = [release.preparedBy, release.checkedBy, release.approvedBy, release.withdrawnBy];
-  const people = await Person.findAll({ where: { id: ids.filter((id) => id !== null) } });
-  const name = (id: number | null) => people.find((p) => p.id === id)?.name ?? null;
+export function presentRelease(release: Release): ReleaseAnswer {
   const day = (date: Date | null) => date?.toISOString() ?? null;
   return {
     state: release.state,
-    preparedBy: name(release.preparedBy)!,
+    preparedBy: release.preparedName,
     preparedAt: release.preparedAt.toISOString(),
-    checkedBy: name(release.checkedBy),
+    checkedBy: release.checkedName,
     checkedAt: day(release.checkedAt),
-    approvedBy: name(release.approvedBy),
+    approvedBy: release.approvedName,
     approvedAt: day(release.approvedAt),
     reason: release.reason,
-    withdrawnBy: name(release.withdrawnBy),
+    withdrawnBy: release.withdrawnName,
     withdrawnAt: day(release.withdrawnAt),
     withdrawnReason: release.withdrawnReason,
   };

@@ -57,7 +57,7 @@ export async function describeRun(
     record,
     baseline,
     baselineLimits: baseline ? await limitValues(sequelize, baseline.id) : {},
-    release: release && (await presentRelease(release)),
+    release: release && presentRelease(release),
     comments: comments.map((comment) => presentComment(comment, caller)),
     hasDrawing: stored.drawing !== null,
     may: {

@@ -33,12 +33,16 @@ export async function findTrend(
   const { where, bind } = conditionsOf(query, projectId);
   const select = <T extends object>(sql: string, values: unknown[]) =>
     sequelize.query<T>(sql, { bind: values, type: QueryTypes.SELECT });
-  const [latest] = await select<{ assembly: string; state: string }>(
-    `SELECT assembly, state FROM runs WHERE ${where.join(' AND ')} ORDER BY at DESC, id DESC LIMIT 1`,
+  const [found] = await select<{ assembly: string; state: string; judged_on: string }>(
+    `SELECT assembly, state, judged_on FROM runs WHERE ${where.join(' AND ')} ORDER BY at DESC, id DESC LIMIT 1`,
     bind,
   );
-  if (!latest) return null;
+  if (!found) return null;
+  const { judged_on, ...latest } = found;
   const one = conditionsOf({ ...query, ...latest }, projectId);
+  // Basic and predicted figures do not make one line.
+  one.bind.push(judged_on);
+  one.where.push(`judged_on = $${one.bind.length}`);
   const rows = await select<Row>(
     `SELECT id, record_id, at, figures, nearest, verdict, release, commit FROM runs
      WHERE ${one.where.join(' AND ')} ORDER BY at DESC, id DESC LIMIT ${RUNS_AT_MOST}`,

@@ -1,3 +1,4 @@
+import { Op } from 'sequelize';
 import { inTransaction } from '../../database.ts';
 import { nameOf } from '../../middleware/caller.ts';
 import { Membership, Person, Token } from '../../models/index.ts';
@@ -55,7 +56,7 @@ const changePerson: Handler<'changePerson'> = async ({ caller, places, body, add
       changes.push(
         body.active
           ? ['account.opened', `opened ${person.name}'s account`]
-          : ['account.shut', `shut ${person.name}'s account; sessions and tokens of theirs ended`],
+          : ['account.shut', await shutSentence(person)],
       );
     if (changes.length === 0) return;
     await person.update({ ...body }, { transaction });
@@ -70,5 +71,15 @@ const changePerson: Handler<'changePerson'> = async ({ caller, places, body, add
   });
   return null;
 };
+
+/** Machines go on when someone leaves: which do so by a token that this person made is said, so that it can be looked at. */
+async function shutSentence({ id, name }: Person): Promise<string> {
+  const where = { personId: id, kind: 'machine', revokedAt: null, expiresAt: { [Op.gt]: new Date() } };
+  const left = (await Token.findAll({ where })).map((token) => token.label);
+  const ended = `shut ${name}'s account; their sessions and their own tokens ended`;
+  return left.length === 0
+    ? ended
+    : `${ended}; machines go on with tokens that they made: ${left.join(', ')}`;
+}
 
 export const peopleRoutes = { listPeople, changePerson };

@@ -53,13 +53,17 @@ async function step<N extends RouteName>(
 }
 
 const askForRelease: Handler<'askForRelease'> = (asked) =>
-  step('ask', asked, async ({ whole, transaction }) => {
+  step('ask', asked, async ({ release: before, whole, transaction }) => {
+    const { person } = asked.caller;
+    // One asked for anew begins anew; what was withdrawn stays in the audit trail.
+    await before?.destroy({ transaction });
     const release = await Release.create(
       {
         projectId: whole.run.projectId,
         runId: whole.run.id,
         state: 'asked',
-        preparedBy: asked.caller.person.id,
+        preparedBy: person.id,
+        preparedName: person.name,
       },
       { transaction },
     );
@@ -68,7 +72,10 @@ const askForRelease: Handler<'askForRelease'> = (asked) =>
 
 const markAsChecked: Handler<'markAsChecked'> = (asked) =>
   step('check', asked, async ({ release, transaction }) => {
-    await release!.update({ checkedBy: asked.caller.person.id, checkedAt: new Date() }, { transaction });
+    await release!.update(
+      { checkedBy: asked.caller.person.id, checkedName: asked.caller.person.name, checkedAt: new Date() },
+      { transaction },
+    );
     return { release: release!, action: 'release.checked', what: 'checked', reason: null };
   });
 
@@ -84,7 +91,13 @@ const releaseRun: Handler<'releaseRun'> = (asked) =>
         'say why it is released all the same, or write a waiver beside the limit in the file',
       );
     await release!.update(
-      { state: 'released', approvedBy: asked.caller.person.id, approvedAt: new Date(), reason },
+      {
+        state: 'released',
+        approvedBy: asked.caller.person.id,
+        approvedName: asked.caller.person.name,
+        approvedAt: new Date(),
+        reason,
+      },
       { transaction },
     );
     return { release: release!, action: 'release.made', what: 'released', reason };
@@ -97,6 +110,7 @@ const withdrawRelease: Handler<'withdrawRelease'> = (asked) =>
       {
         state: 'withdrawn',
         withdrawnBy: asked.caller.person.id,
+        withdrawnName: asked.caller.person.name,
         withdrawnAt: new Date(),
         withdrawnReason: reason,
       },

@@ -31,14 +31,15 @@ function sendFile(
   return SENT;
 }
 
+const CHOICES_AT_MOST = 1000;
+
 const listChoices: Handler<'listChoices'> = async ({ access }) => {
-  const found = await Choice.findAll({
-    where: { projectId: access.project.id },
-    order: ['value'],
-    limit: 3000,
-  });
-  const of = (kind: Choice['kind']) => found.filter((c) => c.kind === kind).map((c) => c.value);
-  return { assemblies: of('assembly'), states: of('state'), branches: of('branch') };
+  const of = async (kind: Choice['kind']) => {
+    const where = { projectId: access.project.id, kind };
+    return (await Choice.findAll({ where, order: ['value'], limit: CHOICES_AT_MOST })).map((c) => c.value);
+  };
+  const [assemblies, states, branches] = await Promise.all([of('assembly'), of('state'), of('branch')]);
+  return { assemblies, states, branches };
 };
 
 const showTrend: Handler<'showTrend'> = ({ access, query, deps }) =>

@@ -8,7 +8,7 @@ import { audit } from '../../services/audit.ts';
 import { checkPassword, hashPassword, isPassword } from '../../services/passwords.ts';
 import { hashSecret, newSecret } from '../../services/secrets.ts';
 import { clearCookie, openSession, presentSession, revokeSessions } from '../../services/sessions.ts';
-import { forgiveAccount, noteWrongPassword, refuseGuessing } from '../../services/throttle.ts';
+import { forgiveAccount, noteAttempt } from '../../services/throttle.ts';
 import type { Handler } from '../route.ts';
 
 const RESET_MINUTES = 60;
@@ -19,11 +19,10 @@ const showSession: Handler<'showSession'> = async ({ caller, deps }) =>
 
 const signIn: Handler<'signIn'> = async ({ body, address, request, response, deps }) => {
   const email = body.email.trim().toLowerCase();
-  await refuseGuessing(email, address);
+  await noteAttempt(email, address);
   const person = await Person.findOne({ where: { email } });
   const usable = person?.active ? person.passwordHash : null;
   if (!(await isPassword(body.password, usable, deps.config.PASSWORD_COST))) {
-    await noteWrongPassword(email, address);
     throw new ProblemError(
       401,
       'SIGN_IN_WRONG',
@@ -93,6 +92,8 @@ const resetPassword: Handler<'resetPassword'> = async ({ places, body, deps, add
     const [taken] = await Reset.update({ usedAt: new Date() }, { where: open, transaction });
     if (taken !== 1) throw usedUp();
     await person.update({ passwordHash }, { transaction });
+    // Other links that lie in the mailbox end with it.
+    await Reset.update({ usedAt: new Date() }, { where: { personId: person.id, usedAt: null }, transaction });
     await revokeSessions(person.id, transaction);
     const entry = { who: person.name, action: 'password.reset', project: null, address };
     await audit({ ...entry, what: `set a new password by a link; all sessions ended` }, transaction);
