@@ -7,6 +7,7 @@ import type * as z from 'zod';
 import { CONTRACT, type Exchange } from '#core/api/contract.ts';
 import { API_ROOT, ROUTES, type Route, type RouteName } from '#core/api/routes.ts';
 import type { Deps } from './deps.ts';
+import { plainError } from './log-error.ts';
 import { authenticate } from './middleware/authenticate.ts';
 import { authorize } from './middleware/authorize.ts';
 import { bodyReader } from './middleware/body.ts';
@@ -50,6 +51,7 @@ const LOGGED = {
         .split('?')[0]!
         .replace(/(\/(?:resets|invitations|mail-stops|reset|invitation|mail-stop)\/)[^/]+/, '$1…'),
     }),
+    err: plainError,
     res: ({ statusCode }: { statusCode: number }) => ({ statusCode }),
   },
 };

@@ -11,6 +11,7 @@ import { recomputeJob } from './jobs/recompute.ts';
 import { recomputeSoon } from './jobs/recompute-soon.ts';
 import { recoverJobs } from './jobs/recover.ts';
 import { sendMailJob } from './jobs/send-mail.ts';
+import { plainError } from './log-error.ts';
 import { openTransport } from './mail/transport.ts';
 
 export interface Running {
@@ -35,7 +36,7 @@ export class PortTaken extends Error {}
  * @throws PortTaken, NewerSchema, or what the database says
  */
 export async function startServer(config: Config, pages: string | null): Promise<Running> {
-  const log = pino({ level: config.LOG_LEVEL, redact: ['req.headers'] });
+  const log = pino({ level: config.LOG_LEVEL, redact: ['req.headers'], serializers: { err: plainError } });
   const sequelize = openDatabase(config.DATABASE_URL, config.DATABASE_CONNECTIONS);
   await migrate(sequelize, config.DATABASE_URL);
   const boss = new PgBoss({
@@ -57,9 +58,9 @@ export async function startServer(config: Config, pages: string | null): Promise
   const transport = openTransport(config);
   for (let i = 0; i < config.WORKERS; i++)
     await boss.work<RecomputeJob>(RECOMPUTE_QUEUE, { batchSize: 60, pollingIntervalSeconds: 0.5 }, (jobs) =>
-      eachOnItsOwn(boss, RECOMPUTE_QUEUE, jobs, (data) => recomputeJob(data, computer)),
+      eachOnItsOwn(boss, RECOMPUTE_QUEUE, jobs, (data) => recomputeJob(data, computer, log)),
     );
-  await boss.work<MailJob>(MAIL_QUEUE, { batchSize: 20, pollingIntervalSeconds: 1 }, (jobs) =>
+  await boss.work<MailJob>(MAIL_QUEUE, { batchSize: 5, pollingIntervalSeconds: 1 }, (jobs) =>
     eachOnItsOwn(boss, MAIL_QUEUE, jobs, (data) => sendMailJob(data, transport)),
   );
   await recoverJobs(sequelize, boss, 0);

@@ -19,7 +19,12 @@ export function recompute(task: RecomputeTask): RecomputeResult {
   const not = (detail: string): RecomputeResult => ({ status: 'not recomputable', detail, drawing: null });
   if (stored.conventions.coreVersion !== CORE_VERSION)
     return not(`made by core version ${stored.conventions.coreVersion}; this server has ${CORE_VERSION}`);
-  const files = new Map(task.inputs.map(({ path, content }) => [path, gunzipSync(content)]));
+  // Each content is unpacked once, however many paths it has.
+  const unpacked = new Map<Uint8Array, Uint8Array>();
+  for (const content of task.contents) unpacked.set(content, gunzipSync(content));
+  const files = new Map(
+    task.inputs.map(({ path, content }) => [path, unpacked.get(task.contents[content]!)!]),
+  );
   const missing = stored.inputs.filter(({ path }) => !files.has(path)).map(({ path }) => path);
   if (missing.length > 0) return not(`inputs that did not come with it: ${missing.join(', ')}`);
   try {

@@ -5,7 +5,10 @@ import type { RollUpRecord } from '#core/record/record.ts';
 export interface RecomputeTask {
   readonly kind: 'recompute';
   readonly content: Uint8Array;
-  readonly inputs: readonly { readonly path: string; readonly content: Uint8Array }[];
+  /** Packed contents, each once. */
+  readonly contents: readonly Uint8Array[];
+  /** By path: the place of its content in `contents`. */
+  readonly inputs: readonly { readonly path: string; readonly content: number }[];
 }
 
 export interface RecomputeResult {

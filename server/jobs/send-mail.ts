@@ -18,5 +18,6 @@ export async function sendMailJob({ mail: id }: MailJob, transport: MailTranspor
     await mail.update({ failure: error instanceof Error ? error.message : String(error) });
     throw error;
   }
-  await mail.update({ sentAt: new Date(), failure: null });
+  // Links in it are secrets: what is sent is not kept.
+  await mail.update({ sentAt: new Date(), failure: null, text: '', headers: {} });
 }

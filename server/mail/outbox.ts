@@ -25,7 +25,10 @@ export async function post(letter: Letter, { boss, config }: Deps, transaction: 
       subject: letter.subject,
       text: [...letter.text, ...foot, '-- \nSteelyard'].join('\n\n'),
       headers: letter.stop
-        ? { 'List-Unsubscribe': `<${letter.stop}>`, 'List-Unsubscribe-Post': 'List-Unsubscribe=One-Click' }
+        ? {
+            'List-Unsubscribe': `<${letter.stop.replace('/mail-stop/', '/api/mail-stops/')}>`,
+            'List-Unsubscribe-Post': 'List-Unsubscribe=One-Click',
+          }
         : {},
     },
     { transaction },

@@ -77,6 +77,16 @@ function problemOf(error: unknown): ProblemError {
       hint: 'nothing was done; the administrator makes room, and what waits is sent again',
       retryAfter: 30,
     });
+  if (/^40P01$|^40001$/.test(stateOf(error)))
+    return new ProblemError(
+      503,
+      'DATABASE_BUSY',
+      'expected a turn at the database, found others in the way',
+      {
+        hint: 'nothing was done; try again in a moment',
+        retryAfter: 1,
+      },
+    );
   return new ProblemError(500, 'BUG', 'the server has a fault; the request id stands in its log', {
     hint: 'report it with the request id',
   });

@@ -11,6 +11,8 @@ export const refuseCrossSite =
   (publicUrl: string): RequestHandler =>
   (request, _, next) => {
     if (SAFE.has(request.method) || request.get('authorization')) return next();
+    // A mail program's one click: the link itself is the right to do it, and stopping mail is all that it can do.
+    if (request.path.startsWith('/mail-stops/')) return next();
     const origin = request.get('origin');
     const own = new Set([new URL(publicUrl).origin, `${request.protocol}://${request.get('host')}`]);
     if (origin !== undefined && own.has(origin)) return next();

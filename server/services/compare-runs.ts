@@ -26,7 +26,9 @@ export async function compareRuns(
       where: { projectId, sha256: found.inputs.flatMap((i) => [i.a, i.b]).filter((h) => h !== null) },
     }),
   ]);
-  const texts = new Map(inputs.map((input) => [input.sha256, textOf(input)]));
+  const texts = new Map(
+    await Promise.all(inputs.map(async (input) => [input.sha256, await textOf(input)] as const)),
+  );
   const textUnder = (hash: string | null): string | null => (hash === null ? '' : (texts.get(hash) ?? null));
   return {
     a: rowA!,
@@ -35,7 +37,7 @@ export async function compareRuns(
     texts: found.inputs.flatMap(({ path, a: before, b: after }) => {
       const [old, now] = [textUnder(before), textUnder(after)];
       if (old === null || now === null) return [];
-      const patch = createTwoFilesPatch(path, path, old, now, '', '', { context: 3, timeout: 2000 });
+      const patch = createTwoFilesPatch(path, path, old, now, '', '', { context: 3, timeout: 300 });
       return patch === undefined || patch.length > PATCH_AT_MOST ? [] : [{ path, patch }];
     }),
   };

@@ -1,4 +1,5 @@
-import { gunzipSync, gzipSync } from 'node:zlib';
+import { promisify } from 'node:util';
+import { gunzip, gzip } from 'node:zlib';
 import { QueryTypes } from 'sequelize';
 import { INPUT_BYTES_AT_MOST } from '#core/api/push.ts';
 import { decodeText } from '#core/yaml/index.ts';
@@ -6,6 +7,9 @@ import type { Deps } from '../deps.ts';
 import { Input } from '../models/index.ts';
 import { badRequest } from '../problem.ts';
 import { sha256 } from './secrets.ts';
+
+const pack = promisify<Uint8Array, { level: number }, Buffer>(gzip);
+const unpack = promisify<Uint8Array, { maxOutputLength: number }, Buffer>(gunzip);
 
 /** Which of some hashes a project has no input for. */
 export async function missingInputs(projectId: number, hashes: readonly string[]): Promise<string[]> {
@@ -40,17 +44,20 @@ export async function keepInput(
     `INSERT INTO inputs (project_id, sha256, size, content) VALUES ($1, $2, $3, $4)
      ON CONFLICT (project_id, sha256) DO NOTHING`,
     {
-      bind: [projectId, hash, bytes.length, gzipSync(bytes, { level: 4 })],
+      bind: [projectId, hash, bytes.length, await pack(bytes, { level: 4 })],
       type: QueryTypes.INSERT,
       transaction: transaction ?? null,
     },
   );
 }
 
-/** The text of an input; null where it is a mesh or no text. */
-export function textOf(input: Input): string | null {
-  const bytes = gunzipSync(input.content, { maxOutputLength: INPUT_BYTES_AT_MOST });
-  if (bytes.length > 4 * 2 ** 20 || bytes.includes(0)) return null;
+const TEXT_AT_MOST = 4 * 2 ** 20;
+
+/** The text of an input; null where it is a mesh, no text, or too long to be shown. */
+export async function textOf(input: Input): Promise<string | null> {
+  if (Number(input.size) > TEXT_AT_MOST) return null;
+  const bytes = await unpack(input.content, { maxOutputLength: INPUT_BYTES_AT_MOST });
+  if (bytes.includes(0)) return null;
   try {
     return decodeText(bytes, '');
   } catch {

@@ -33,13 +33,15 @@ export async function pushRuns(
   access: Access,
   deps: Deps,
 ): Promise<Answer[]> {
+  const stampAt = (i: number): string => runs[i]!.record.stamp;
   const checked = runs.map((run) => ({ run, fault: faultOf(run.record) }));
   const made: string[] = [];
   const answers = await inTransaction(deps.sequelize, async (transaction) => {
-    const all: Answer[] = [];
-    for (const { run, fault } of checked)
-      all.push(fault ? refused(fault) : await pushRun(run, caller, access, deps, made, transaction));
-    return all;
+    const all = checked.map(({ fault }): Answer | null => (fault ? refused(fault) : null));
+    // In the order of stamps: two requests that bring the same records wait for one another, never in a circle.
+    const order = checked.map((_, i) => i).sort((a, b) => (stampAt(a) < stampAt(b) ? -1 : 1));
+    for (const i of order) all[i] ??= await pushRun(checked[i]!.run, caller, access, deps, made, transaction);
+    return all.map((answer) => answer!);
   });
   for (const record of made) deps.recomputeSoon.add(record);
   return answers;
@@ -101,7 +103,7 @@ function textFault(record: RollUpRecord): Fault | null {
   }
 }
 
-/** @param made gets the record's id where its content is new and not yet computed here */
+/** @param made gets the record's id where it waits to be computed again */
 async function pushRun(
   pushed: PushedRun,
   caller: Caller,
@@ -110,17 +112,18 @@ async function pushRun(
   made: string[],
   transaction: Transaction,
 ): Promise<Answer> {
-  const { record, drawing } = pushed;
+  const { record } = pushed;
   const found = await insertRun(pushed, caller, project.id, deps, transaction);
-  if (found.contradicts)
+  if (!found)
     return refused({
       code: 'RECORD_CONTRADICTS',
-      message: `expected the record that the server has under stamp ${record.stamp.slice(0, 12)}, found other figures`,
+      message: `expected the figures that the server computes under stamp ${record.stamp.slice(0, 12)}, found others`,
       hint: 'one stamp is one record: compute it again with an unchanged steelyard and push that',
     });
-  if (found.new_record && drawing === undefined) made.push(found.record_id);
-  if (found.run_id) await tellOfLimits(found.run_id, record, project, deps, transaction);
-  const id = found.run_id ?? (await knownRun(found.record_id, originOf(pushed), deps, transaction));
+  if (found.waits) made.push(found.record_id);
+  const known = found.run_id ? null : await knownRun(found.record_id, pushed, project, deps, transaction);
+  const id = found.run_id ?? known!.id;
+  if (found.run_id || known?.moved) await tellOfLimits(id, record, project, deps, transaction);
   return {
     status: found.run_id ? 'created' : 'known',
     id,
@@ -129,25 +132,32 @@ async function pushRun(
   };
 }
 
+/** A tree with changes is no commit, though it stands on one: what is pushed when they are committed is another run. */
 const originOf = ({ record, key }: PushedRun): string =>
-  record.provenance.commit ? `commit:${record.provenance.commit}` : `push:${key}`;
+  record.provenance.commit
+    ? `commit:${record.provenance.commit}${record.provenance.dirty ? ':dirty' : ''}`
+    : `push:${key}`;
 
 interface Inserted {
   readonly record_id: string;
-  readonly new_record: boolean;
-  readonly contradicts: boolean;
-  /** Null where the run was there already, or the record contradicts. */
+  /** Waits to be computed again: it is new, or could not be before and may be now that its inputs came. */
+  readonly waits: boolean;
+  /** Null where the run was there already. */
   readonly run_id: string | null;
 }
 
-/** One statement: what is there already is found, not written again, however many send it at once. */
+/**
+ * One statement: what is there already is found, not written again, however many send it at once.
+ *
+ * @returns null where the server has computed other figures under this stamp
+ */
 async function insertRun(
   pushed: PushedRun,
   { person, token }: Caller,
   projectId: number,
   { sequelize }: Deps,
   transaction: Transaction,
-): Promise<Inserted> {
+): Promise<Inserted | null> {
   const { record, drawing, at } = pushed;
   const { provenance } = record;
   const { content, contentSha256 } = packContent(contentOf(record));
@@ -179,22 +189,26 @@ async function insertRun(
     JSON.stringify(provenance),
   ];
   const [found] = await sequelize.query<Inserted>(INSERT_RUN, { bind, type: QueryTypes.SELECT, transaction });
-  return found!;
+  return found ?? null;
 }
 
 const INSERT_RUN = `
   WITH record AS (
     INSERT INTO records (project_id, stamp, content_sha256, content, drawing, recomputation, recomputed_at)
-    VALUES ($1, $2, $3, $4, $5::text, CASE WHEN $5::text IS NULL THEN 'waiting' ELSE 'recomputed' END,
-      CASE WHEN $5::text IS NULL THEN NULL ELSE now() END)
-    ON CONFLICT (project_id, stamp) DO UPDATE SET stamp = EXCLUDED.stamp
-    RETURNING id, (xmax = 0) AS new, content_sha256 <> $3 AS contradicts
+    SELECT $1::int, $2, $3, $4::bytea, $5::text, CASE WHEN $5::text IS NULL THEN 'waiting' ELSE 'recomputed' END,
+      CASE WHEN $5::text IS NULL THEN NULL ELSE now() END
+    WHERE NOT EXISTS (
+      SELECT 1 FROM records o
+      WHERE o.project_id = $1 AND o.stamp = $2 AND o.content_sha256 <> $3 AND o.recomputation = 'recomputed')
+    ON CONFLICT (project_id, stamp, content_sha256) DO UPDATE SET recomputation =
+      CASE WHEN records.recomputation = 'not recomputable' THEN 'waiting' ELSE records.recomputation END
+    RETURNING id, recomputation = 'waiting' AS waits
   ), run AS (
     INSERT INTO runs (project_id, record_id, origin, assembly, state, branch, verdict, at, commit, tag, dirty, author,
       person_id, token_id, judged_on, mass, figures, nearest, outside, file_units, provenance)
     SELECT $1, id, $6, $7, $8, $9, $10, coalesce($11::timestamptz, clock_timestamp()), $12, $13, $14::boolean, $15,
       $16::int, $17::int, $18, $19::float8, $20::float8[], $21::text[], $22::text[], $23::jsonb, $24::jsonb
-    FROM record WHERE NOT contradicts
+    FROM record
     ON CONFLICT (record_id, origin) DO NOTHING RETURNING id
   ), seen AS (
     INSERT INTO choices (project_id, kind, value)
@@ -203,18 +217,34 @@ const INSERT_RUN = `
       SELECT 1 FROM choices o WHERE o.project_id = $1 AND o.kind = c.kind AND o.value = c.value)
     ON CONFLICT DO NOTHING
   )
-  SELECT record.id AS record_id, record.new AS new_record, record.contradicts, run.id AS run_id
+  SELECT record.id AS record_id, record.waits, run.id AS run_id
   FROM record LEFT JOIN run ON true`;
 
+/**
+ * The run that was there. One that came from a branch of its own and is now on a watched one belongs to the watched one:
+ * a branch that was merged as it was.
+ */
 async function knownRun(
   recordId: string,
-  origin: string,
+  pushed: PushedRun,
+  { watchedBranches }: Access['project'],
   { sequelize }: Deps,
   transaction: Transaction,
-): Promise<string> {
-  const [known] = await sequelize.query<{ id: string }>(
-    'SELECT id FROM runs WHERE record_id = $1 AND origin = $2',
-    { bind: [recordId, origin], type: QueryTypes.SELECT, transaction },
+): Promise<{ id: string; moved: boolean }> {
+  const [known] = await sequelize.query<{ id: string; branch: string }>(
+    'SELECT id, branch FROM runs WHERE record_id = $1 AND origin = $2',
+    { bind: [recordId, originOf(pushed)], type: QueryTypes.SELECT, transaction },
   );
-  return known!.id;
+  const { id, branch } = known!;
+  const { provenance } = pushed.record;
+  const moved = watchedBranches.includes(provenance.branch ?? '') && !watchedBranches.includes(branch);
+  if (moved)
+    await sequelize.query(
+      `WITH seen AS (
+         INSERT INTO choices (project_id, kind, value) SELECT project_id, 'branch', $2 FROM runs WHERE id = $1
+         ON CONFLICT DO NOTHING)
+       UPDATE runs SET branch = $2, provenance = $3::jsonb WHERE id = $1`,
+      { bind: [id, provenance.branch, JSON.stringify(provenance)], transaction },
+    );
+  return { id, moved };
 }

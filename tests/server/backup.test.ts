@@ -61,6 +61,9 @@ describe('a backup', () => {
       const refused = await run('restore', url, file);
       expect([refused.exitCode, refused.stderr]).toEqual([1, expect.stringContaining('--replace')]);
       expect(await Run.count({ where: { branch: 'changed since' } })).toBe(2);
+      // Nor by what is no backup, though it is asked to.
+      expect((await run('restore', url, built('restore'), '--replace')).exitCode).toBe(1);
+      expect(await Run.count({ where: { branch: 'changed since' } })).toBe(2);
     } finally {
       await second.stop();
     }
@@ -77,7 +80,7 @@ describe('a backup', () => {
     const url = await createDatabase(inject('postgres'));
     const { exitCode, stderr } = await run('restore', url, built('restore'));
     expect(exitCode).toBe(1);
-    expect(stderr).toContain('pg_restore failed');
+    expect(stderr).toContain('pg_restore cannot read');
     const sequelize = openDatabase(url, 2);
     const [rows] = await sequelize.query("SELECT to_regclass('public.people') AS people");
     expect(rows).toEqual([{ people: null }]);

@@ -111,6 +111,14 @@ describe('signing in', () => {
     await server.signIn(person);
   });
 
+  it('counts guesses that come all at once', async () => {
+    const person = await server.person('Guessed At Once');
+    const answers = await Promise.all(
+      Array.from({ length: 30 }, () => server.anyone().problem('signIn', wrong(person.email))),
+    );
+    expect(answers.filter((a) => a === '401 SIGN_IN_WRONG').length).toBeLessThanOrEqual(5);
+  });
+
   it('says the same of an account that is not there', async () => {
     expect(await server.anyone().problem('signIn', wrong('nobody@example.org'))).toBe('401 SIGN_IN_WRONG');
   });

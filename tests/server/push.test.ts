@@ -36,6 +36,11 @@ const recomputed = (id: string) =>
     return run.recomputation.status !== 'waiting' && run.recomputation;
   });
 
+const forged = (record: RollUpRecord): RollUpRecord => ({
+  ...record,
+  predicted: { ...record.predicted, mass: record.predicted.mass * 1.01 },
+});
+
 describe('a push', () => {
   it('is in the history when it is acknowledged, and once however often it is sent', async () => {
     const records = recordsOfText(machineText(1.1), { commit: 'a'.repeat(40), branch: 'main' });
@@ -82,15 +87,61 @@ describe('a push', () => {
     expect(body.runs[1]!.fault).toMatchObject({ code: 'RECORD_STAMP' });
   });
 
-  it('is refused when it says other figures under a stamp that the server has', async () => {
+  it('is refused when it says other figures than the server computes under that stamp', async () => {
     const records = recordsOfText(machineText(1.6), { commit: 'f'.repeat(40) });
-    await pushAll(records);
-    const forged = records.map((r) => ({
-      ...r,
-      predicted: { ...r.predicted, mass: r.predicted.mass * 1.01 },
-    }));
-    const { body } = await pushAll(forged);
+    const { text, sha256 } = records[0]!.inputs[0]!;
+    await sendInput(text!, sha256);
+    const { body: first } = await pushAll(records);
+    for (const { id } of first.runs) await recomputed(id!);
+    const { body } = await pushAll(records.map(forged));
     expect(body.runs.map((r) => r.fault?.code)).toEqual(['RECORD_CONTRADICTS', 'RECORD_CONTRADICTS']);
+  });
+
+  it('with false figures does not keep the true ones out, whichever came first', async () => {
+    const [record] = recordsOfText(machineText(1.65), { commit: '0'.repeat(40) });
+    const { text, sha256 } = record!.inputs[0]!;
+    await sendInput(text!, sha256);
+    const [wrong] = (await pushAll([forged(record!)])).body.runs;
+    expect((await recomputed(wrong!.id!)).status).toBe('differs');
+    const [right] = (await pushAll([record!])).body.runs;
+    expect(right!.status).toBe('created');
+    expect((await recomputed(right!.id!)).status).toBe('recomputed');
+    expect((await runOf(wrong!.id!)).run.recomputation.status).toBe('differs');
+  });
+
+  it('is computed again when its inputs come later', async () => {
+    const [record] = recordsOfText(machineText(1.66), { commit: '7'.repeat(40) });
+    const [run] = (await pushAll([record!])).body.runs;
+    expect((await recomputed(run!.id!)).status).toBe('not recomputable');
+    const { text, sha256 } = record!.inputs[0]!;
+    await sendInput(text!, sha256);
+    expect((await pushAll([record!])).body.runs[0]).toMatchObject({ status: 'known', id: run!.id });
+    await until(async () => (await runOf(run!.id!)).run.recomputation.status === 'recomputed');
+  });
+
+  it('from a tree with changes is another run than from the commit it stands on', async () => {
+    const text = machineText(1.67);
+    const at = { commit: '8'.repeat(40), branch: 'mine' };
+    const [dirty] = (await pushAll(recordsOfText(text, { ...at, dirty: true }))).body.runs;
+    const [clean] = (await pushAll(recordsOfText(text, at))).body.runs;
+    expect(clean!.id).not.toBe(dirty!.id);
+    expect((await runOf(clean!.id!)).run.dirty).toBe(false);
+    // The branch is merged as it was: the run belongs to the watched branch from then on, and stays one.
+    const [merged] = (await pushAll(recordsOfText(text, { ...at, branch: 'main' }))).body.runs;
+    expect(merged).toMatchObject({ status: 'known', id: clean!.id });
+    expect((await runOf(clean!.id!)).run.branch).toBe('main');
+  });
+
+  it('in the same moment as others that bring the same records in another order comes through', async () => {
+    const records = Array.from({ length: 12 }, (_, i) =>
+      recordsOfText(machineText(4 + i / 100), { commit: '9'.repeat(39) + i.toString(16) }),
+    ).flat();
+    const answers = await Promise.all(
+      [records, [...records].reverse(), records, [...records].reverse()].map((all) => pushAll(all)),
+    );
+    for (const { status } of answers) expect([200, 201]).toContain(status);
+    const created = answers.flatMap((a) => a.body.runs).filter((r) => r.status === 'created');
+    expect(created).toHaveLength(24);
   });
 
   it('of what is no record is refused as a whole, with the place of the fault', async () => {

@@ -97,6 +97,13 @@ describe('a release', () => {
       withdrawnBy: 'Second Approver',
       withdrawnReason: 'wrong load case',
     });
+    // It can be asked for anew, and begins anew.
+    await who.engineer.get('askForRelease', { places: released });
+    expect((await detail(released)).release).toMatchObject({
+      state: 'asked',
+      approvedBy: null,
+      withdrawnBy: null,
+    });
   });
 
   it('is not made by who pushed the run, nor by who wrote its commit, by name or by address', async () => {
@@ -154,6 +161,23 @@ describe('a release', () => {
       ),
     );
     expect(answers.map((a) => a.status).sort()).toEqual([200, 409, 409, 409]);
+  });
+});
+
+describe('a run from a machine', () => {
+  it('that says no author counts as pushed by who gave it the token', async () => {
+    const places = await pushed(1.8, { commit: undefined });
+    await who.engineer.get('askForRelease', { places });
+    expect((await detail(places, who.approver)).may.release.why).toBe('You pushed it yourself.');
+    await who.second.get('releaseRun', { places, body: {} });
+  });
+
+  it('keeps the names on its release when people are renamed', async () => {
+    const places = await pushed(1.9, { author: 'Some One <some@example.org>' });
+    await who.engineer.get('askForRelease', { places });
+    await who.engineer.get('changeAccount', { body: { name: 'Pre Parer-Newname' } });
+    expect((await detail(places)).release!.preparedBy).toBe('Pre Parer');
+    await who.engineer.get('changeAccount', { body: { name: 'Pre Parer' } });
   });
 });
 

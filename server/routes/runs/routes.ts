@@ -59,10 +59,12 @@ const showRun: Handler<'showRun'> = async (asked) =>
 const showInputs: Handler<'showInputs'> = async (asked) => {
   const { record } = await wholeRun(asked);
   const found = await inputsOf(record.inputs, asked.access.project.id);
-  return record.inputs.map(({ path, sha256, bytes }) => {
-    const input = found.get(sha256);
-    return { path, sha256, text: input ? textOf(input) : null, bytes: bytes ?? null };
-  });
+  return Promise.all(
+    record.inputs.map(async ({ path, sha256, bytes }) => {
+      const input = found.get(sha256);
+      return { path, sha256, text: input ? await textOf(input) : null, bytes: bytes ?? null };
+    }),
+  );
 };
 
 async function inputsOf(

@@ -28,6 +28,7 @@ interface File {
 /** Files from a browser: rolled up in a thread; kept, with their runs, only when they are sound. */
 const upload: Handler<'upload'> = async (asked) => {
   const { request, response, deps, caller, access } = asked;
+  refuseLength(request);
   await new Promise<void>((resolve, reject) => {
     read(request, response, (error) => (error ? reject(error) : resolve()));
   });
@@ -48,11 +49,28 @@ const upload: Handler<'upload'> = async (asked) => {
   });
   if ('faults' in result)
     return { runs: [], faults: [...result.faults], texts: textsOf(result.faults, files) };
-  const runs = await keepRuns(result.records, result.drawings, files, asked);
-  const rows = await Promise.all(runs.map(({ id }) => findRunRow(deps.sequelize, access.project.id, id!)));
+  const answers = await keepRuns(result.records, result.drawings, files, asked);
+  const refusals = answers.flatMap(({ fault }) => (fault ? [fault] : []));
+  if (refusals.length > 0) return { runs: [], faults: refusals, texts: [] };
+  const rows = await Promise.all(answers.map(({ id }) => findRunRow(deps.sequelize, access.project.id, id!)));
   deps.log.info({ project: access.project.slug, person: caller.person.id, runs: rows.length }, 'upload');
   return { runs: rows.map((row) => row!), faults: [], texts: [] };
 };
+
+/** Before a byte is read: Node holds a body to the length that it says. */
+function refuseLength(request: AskedInProject<'upload'>['request']): void {
+  const length = Number(request.get('content-length'));
+  if (!(length > 0))
+    throw badRequest(
+      'UPLOAD_LENGTH',
+      'expected a body that says its length, found none',
+      'send Content-Length',
+    );
+  if (length > TOTAL_AT_MOST)
+    throw new ProblemError(413, 'UPLOAD_TOO_LARGE', 'expected at most 256 MB in all', {
+      hint: 'push them with the command',
+    });
+}
 
 function filesOf(request: AskedInProject<'upload'>['request']): {
   files: File[];
@@ -71,11 +89,6 @@ function filesOf(request: AskedInProject<'upload'>['request']): {
     );
   if (new Set(paths).size < paths.length)
     throw badRequest('UPLOAD_TWICE', 'expected every path once', 'leave one of them out');
-  const total = files.reduce((sum, f) => sum + f.content.length, 0);
-  if (total > TOTAL_AT_MOST)
-    throw new ProblemError(413, 'UPLOAD_TOO_LARGE', 'expected at most 256 MB in all', {
-      hint: 'push them with the command',
-    });
   const top = typeof fields.top === 'string' && fields.top ? nameOfFile(fields.top) : paths[0]!;
   if (!paths.includes(top))
     throw badRequest(

@@ -29,7 +29,7 @@ export function TextsChangeSection({ comparison: { texts, difference } }: { comp
           {other.map((i) => (
             <li key={i.path} className="border-b border-rule py-1.5">
               <span className="code break-all">{i.path}</span>{' '}
-              <span className="soft">{i.change}; not a text</span>
+              <span className="soft">{i.change}; no text, or one too long to be compared here</span>
             </li>
           ))}
         </ul>
