@@ -120,7 +120,7 @@ describe('a push', () => {
   });
 
   it('from a tree with changes is another run than from the commit it stands on', async () => {
-    const text = machineText(1.67);
+    const text = machineText(1.67, 9);
     const at = { commit: '8'.repeat(40), branch: 'mine' };
     const [dirty] = (await pushAll(recordsOfText(text, { ...at, dirty: true }))).body.runs;
     const [clean] = (await pushAll(recordsOfText(text, at))).body.runs;

@@ -36,7 +36,8 @@ let commits = 0;
 /** Pushes one run with its input, waits for the server's own computation, and gives its places. */
 async function pushed(tip: number, more: Record<string, unknown> = {}, limit = 9, by: Client = ci) {
   commits += 1;
-  const provenance = { commit: commits.toString(16).padStart(40, '9'), branch: 'main', ...more };
+  const commit = commits.toString(16).padStart(40, '9');
+  const provenance = { commit, branch: 'main', author: 'Some One <some@example.org>', ...more };
   const [record] = recordsOfText(machineText(tip, limit), provenance);
   const { text, sha256 } = record!.inputs[0]!;
   await by.get('putInput', { places: { project: 'rover', sha256 }, body: new TextEncoder().encode(text) });
@@ -166,14 +167,14 @@ describe('a release', () => {
 
 describe('a run from a machine', () => {
   it('that says no author counts as pushed by who gave it the token', async () => {
-    const places = await pushed(1.8, { commit: undefined });
+    const places = await pushed(1.8, { author: undefined });
     await who.engineer.get('askForRelease', { places });
     expect((await detail(places, who.approver)).may.release.why).toBe('You pushed it yourself.');
     await who.second.get('releaseRun', { places, body: {} });
   });
 
   it('keeps the names on its release when people are renamed', async () => {
-    const places = await pushed(1.9, { author: 'Some One <some@example.org>' });
+    const places = await pushed(1.9);
     await who.engineer.get('askForRelease', { places });
     await who.engineer.get('changeAccount', { body: { name: 'Pre Parer-Newname' } });
     expect((await detail(places)).release!.preparedBy).toBe('Pre Parer');
