@@ -106,8 +106,10 @@ describe.each(PAGES)('the page %s', (name) => {
   });
 
   it('has nothing against WCAG 2.2 AA that axe finds, in light and in dark', async () => {
+    const paper = await styleOf(page.locator('body'), 'backgroundColor');
     expect(await faultsOfAxe(page)).toEqual([]);
     await page.emulateMedia({ colorScheme: 'dark' });
+    expect(await styleOf(page.locator('body'), 'backgroundColor')).not.toBe(paper);
     expect(await faultsOfAxe(page)).toEqual([]);
   });
 

@@ -66,7 +66,7 @@ function OpenList<T extends string>({
     <span
       ref={box.list}
       role="listbox"
-      tabIndex={-1}
+      tabIndex={0}
       aria-label={name}
       aria-activedescendant={`${id}-${box.at}`}
       onKeyDown={box.onListKey}
