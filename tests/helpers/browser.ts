@@ -49,6 +49,7 @@ export function oneBrowser(address: () => string): { open: (visitor?: Visitor) =
   let browser: Browser;
   const contexts: BrowserContext[] = [];
   const complaints: string[] = [];
+  const signedIn = new Map<string, Cookies>();
   beforeAll(async () => {
     browser = await launch();
   });
@@ -71,16 +72,27 @@ export function oneBrowser(address: () => string): { open: (visitor?: Visitor) =
     const note = (text: string) => mayComplain?.test(text) || complaints.push(text);
     context.on('console', (message) => message.type() === 'error' && note(message.text()));
     context.on('weberror', (error) => note(String(error.error())));
-    if (as) await signIn(context, as, address());
+    if (as) {
+      const known = signedIn.get(as.email);
+      if (known) await context.addCookies(known);
+      else signedIn.set(as.email, await signIn(context, as, address()));
+    }
     return context.newPage();
   };
   return { open };
 }
 
-/** Gives a context the cookie of a session without showing the sign-in page. */
-async function signIn(context: BrowserContext, data: NonNullable<Visitor['as']>, origin: string) {
+type Cookies = Awaited<ReturnType<BrowserContext['cookies']>>;
+
+/** Gives a context the cookie of a session without showing the sign-in page; it serves other contexts too. */
+async function signIn(
+  context: BrowserContext,
+  data: NonNullable<Visitor['as']>,
+  origin: string,
+): Promise<Cookies> {
   const answer = await context.request.post(addressOf('signIn'), { data, headers: { origin } });
   if (!answer.ok()) throw new Error(`sign-in answered ${answer.status()}`);
+  return context.cookies();
 }
 
 /** Opens an address and waits until nothing on the page is still loading. */
@@ -97,10 +109,26 @@ export async function settled(page: Page): Promise<void> {
 /** As `expect.poll`, with patience for a busy machine. */
 export const eventually = <T>(look: () => T) => expect.poll(look, { timeout: PATIENCE_MS });
 
-/** What axe finds against WCAG 2.2 AA: the rule and where, a line each. */
+/** What axe finds against WCAG 2.2 AA as a page stands: the rule and where, a line each. */
 export async function faultsOfAxe(page: Page): Promise<string[]> {
   const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
-  const { violations } = await new AxeBuilder({ page }).withTags(tags).setLegacyMode().analyze();
+  return linesOf(new AxeBuilder({ page }).withTags(tags));
+}
+
+/** The same in light, then, for the rules that another theme can break, in dark. */
+export async function faultsInBothThemes(page: Page): Promise<string[]> {
+  const paper = () => styleOf(page.locator('body'), 'backgroundColor');
+  const light = await paper();
+  const found = await faultsOfAxe(page);
+  await page.emulateMedia({ colorScheme: 'dark' });
+  if ((await paper()) === light) throw new Error('the dark theme has the paper of the light one');
+  return [...found, ...(await linesOf(new AxeBuilder({ page }).withRules(RULES_OF_COLOUR)))];
+}
+
+const RULES_OF_COLOUR = ['color-contrast', 'link-in-text-block'];
+
+async function linesOf(axe: AxeBuilder): Promise<string[]> {
+  const { violations } = await axe.setLegacyMode().analyze();
   return violations.flatMap(({ id, nodes }) =>
     nodes.map(({ target, failureSummary }) => `${id}: ${target.join(' ')}: ${failureSummary}`),
   );

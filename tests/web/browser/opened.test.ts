@@ -4,7 +4,14 @@ import type { RunPage } from '#core/api/runs.ts';
 import type { Who } from '#server/demo/people.ts';
 import { Person } from '#server/models/index.ts';
 import { linkTo, PATHS } from '#web/paths.ts';
-import { beyondEdge, eventually, faultsOfAxe, oneBrowser, settled, visit } from '../../helpers/browser.ts';
+import {
+  beyondEdge,
+  eventually,
+  faultsInBothThemes,
+  oneBrowser,
+  settled,
+  visit,
+} from '../../helpers/browser.ts';
 import { PETREL, signInOf, startDemo } from '../../helpers/demo-server.ts';
 import { machineText } from '../../helpers/machine-text.ts';
 import type { TestServer } from '../../helpers/test-server.ts';
@@ -131,9 +138,7 @@ describe.each(OPENED)('$what', ({ as, address, act }) => {
     await visit(page, address());
     await act(page);
     await settled(page);
-    expect(await faultsOfAxe(page)).toEqual([]);
-    await page.emulateMedia({ colorScheme: 'dark' });
-    expect(await faultsOfAxe(page)).toEqual([]);
+    expect(await faultsInBothThemes(page)).toEqual([]);
     await page.setViewportSize({ width: 320, height: 640 });
     await eventually(() => beyondEdge(page)).toBe(0);
   });

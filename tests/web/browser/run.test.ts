@@ -68,6 +68,12 @@ async function shown(page: Page, { about, products }: View): Promise<{ head: str
 }
 
 describe("the tensor on a run's page", () => {
+  let shared: Page;
+  beforeAll(async () => {
+    shared = await browser.open({ as: signInOf('lucia'), stays: true });
+  });
+  afterAll(() => shared?.context().close());
+
   it.each<Partial<View>>([
     {},
     { about: 'origin' },
@@ -78,8 +84,9 @@ describe("the tensor on a run's page", () => {
     { about: 'origin', products: 'positive', units: 'kg,mm', on: 'basic' },
   ])('is the one that core prints for the address %o', async (asked) => {
     const view = { ...AS_OPENED, ...asked };
-    const page = await open(`?${new URLSearchParams(asked as Record<string, string>)}`);
-    expect(await shown(page, view)).toEqual(printed(view));
+    const search = new URLSearchParams(asked as Record<string, string>);
+    await visit(shared, `${linkTo.run(PETREL, detail.run.id)}?${search}`);
+    expect(await shown(shared, view)).toEqual(printed(view));
   });
 
   it('changes with the sentence above it, and so does the address', async () => {
