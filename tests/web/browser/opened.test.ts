@@ -47,7 +47,7 @@ const OPENED: Opened[] = [
   {
     what: 'a list of the sentence and the table behind the trend',
     as: 'lucia',
-    address: () => linkTo.history(PETREL),
+    address: () => `${linkTo.history(PETREL)}?verdict=outside`,
     act: async (page) => {
       await page.getByText('The same as a table').click();
       await page.getByRole('region', { name: /as a table$/ }).waitFor();

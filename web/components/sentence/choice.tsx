@@ -57,10 +57,15 @@ function OpenList<T extends string>({
   box: ReturnType<typeof useListbox>;
 }) {
   const [shift, setShift] = useState(0);
-  // Where the list would run off the page at its right, it moves to the left.
+  // Where the list would run off the page at its right, it moves to the left; again when the page turns or shrinks.
   useLayoutEffect(() => {
-    const { right } = box.list.current!.getBoundingClientRect();
-    setShift(Math.min(0, document.documentElement.clientWidth - 8 - right));
+    const place = () => {
+      const { right } = box.list.current!.getBoundingClientRect();
+      setShift((now) => Math.min(0, document.documentElement.clientWidth - 8 - (right - now)));
+    };
+    place();
+    window.addEventListener('resize', place);
+    return () => window.removeEventListener('resize', place);
   }, [box.list]);
   return (
     <span
