@@ -26,7 +26,11 @@ beforeAll(async () => {
   runs = [];
   for (const [i, tip] of [1, 1.2].entries()) {
     const commit = `${i + 1}`.repeat(40);
-    const [record] = recordsOfText(machineText(tip), { commit, branch: 'main', dirty: false });
+    const [record] = recordsOfText(machineText(tip), {
+      commit,
+      branch: 'main',
+      author: 'Some One <some@example.org>',
+    });
     const { text, sha256 } = record!.inputs[0]!;
     const places = { project: 'rover', sha256 };
     await ci.get('putInput', { places, body: new TextEncoder().encode(text) });
