@@ -36,6 +36,8 @@ describe('difference: the sum of the parts', () => {
     fc.assert(
       fc.property(anyTwoMachines, ({ a, b }) => {
         const d = compare(a, b);
+        // A cut-out that leaves nothing of its host but rounding leaves no centre either.
+        fc.pre(d.principal !== null);
         const attributed = d.quantities.filter((q) => isAttributed(q.name));
         expect(attributed.length).toBeGreaterThanOrEqual(11);
         for (const { name, change, remainder } of attributed) {
