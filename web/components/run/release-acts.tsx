@@ -53,10 +53,10 @@ export function ReleaseActs({ detail, project }: { detail: RunDetail; project: s
       shown: approver && !released,
     },
     {
-      name: 'Withdraw …',
+      name: released ? 'Withdraw …' : 'Decline …',
       allowed: may.withdraw,
       onClick: () => setAsking('withdraw'),
-      shown: approver && released,
+      shown: approver && may.withdraw.allowed,
     },
   ];
   const shown = buttons.filter((b) => b.shown);
