@@ -4,7 +4,9 @@ export default defineConfig({
   test: {
     include: ['tests/**/*.test.ts'],
     globalSetup: ['tests/helpers/build-command.ts', 'tests/helpers/test-database.ts'],
-    testTimeout: 60_000,
-    hookTimeout: 240_000,
+    // Most of the time is spent waiting for processes: the command, a server, a browser.
+    maxWorkers: 2,
+    testTimeout: 120_000,
+    hookTimeout: 300_000,
   },
 });
