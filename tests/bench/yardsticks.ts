@@ -26,7 +26,7 @@ app.post('/bare', express.json({ limit: '64mb' }), async (request, response) => 
 });
 app.use(pinoHttp({ logger: log, quietReqLogger: true }), helmet(), cookieParser());
 app.get('/one/:project/:run', async (request, response) => {
-  const caller = await authenticate(request, { config } as Deps);
+  const caller = await authenticate(request, { config, sequelize } as Deps);
   const { project } = request.params;
   const access = await authorize(
     { method: 'GET', path: '', who: 'viewer', token: 'read' },
