@@ -16,6 +16,7 @@ export async function missingInputs(projectId: number, hashes: readonly string[]
   const found = await Input.findAll({
     where: { projectId, sha256: [...new Set(hashes)] },
     attributes: ['sha256'],
+    raw: true,
   });
   const known = new Set(found.map((input) => input.sha256));
   return [...new Set(hashes)].filter((hash) => !known.has(hash));
